@@ -1,0 +1,113 @@
+using System;
+using System.Globalization;
+using System.Numerics;
+
+namespace FamilyGen.Generator.Algebra;
+
+/// <summary>An exact fraction in lowest terms with a positive denominator.</summary>
+internal readonly struct Rational : IEquatable<Rational>, IComparable<Rational>
+{
+    private readonly BigInteger _denominatorLessOne;
+
+    public Rational(BigInteger numerator, BigInteger denominator)
+    {
+        if (denominator.IsZero)
+            throw new DivideByZeroException();
+        var divisor = BigInteger.GreatestCommonDivisor(numerator, denominator);
+        if (denominator.Sign < 0)
+            divisor = -divisor;
+        Numerator = numerator / divisor;
+        _denominatorLessOne = (denominator / divisor) - 1;
+    }
+
+    public BigInteger Numerator { get; }
+
+    public BigInteger Denominator => _denominatorLessOne + 1;
+
+    public bool IsInteger => _denominatorLessOne.IsZero;
+
+    public bool IsZero => Numerator.IsZero;
+
+    public int Sign => Numerator.Sign;
+
+    public static Rational Zero => default;
+
+    public static Rational One => new(1, 1);
+
+    public static implicit operator Rational(int value) => new(value, 1);
+
+    public static implicit operator Rational(long value) => new(value, 1);
+
+    public static Rational operator +(Rational a, Rational b) => new((a.Numerator * b.Denominator) + (b.Numerator * a.Denominator), a.Denominator * b.Denominator);
+
+    public static Rational operator -(Rational a, Rational b) => a + (-b);
+
+    public static Rational operator -(Rational a) => new(-a.Numerator, a.Denominator);
+
+    public static Rational operator *(Rational a, Rational b) => new(a.Numerator * b.Numerator, a.Denominator * b.Denominator);
+
+    public static Rational operator /(Rational a, Rational b) => new(a.Numerator * b.Denominator, a.Denominator * b.Numerator);
+
+    public static bool operator ==(Rational a, Rational b) => a.Equals(b);
+
+    public static bool operator !=(Rational a, Rational b) => !a.Equals(b);
+
+    public static bool operator <(Rational a, Rational b) => a.CompareTo(b) < 0;
+
+    public static bool operator >(Rational a, Rational b) => a.CompareTo(b) > 0;
+
+    /// <summary>The nearest double.</summary>
+    public double ToDouble()
+    {
+        if (IsInteger)
+            return (double)Numerator;
+
+        // Scale so that the integer quotient has at least 64 bits; the conversion then rounds once.
+        var shift = 64 - (int)(BitLength(Numerator) - BitLength(Denominator));
+        var quotient = shift >= 0
+            ? (BigInteger.Abs(Numerator) << shift) / Denominator
+            : BigInteger.Abs(Numerator) / (Denominator << -shift);
+        return Numerator.Sign * (double)quotient * Math.Pow(2, -shift);
+    }
+
+    /// <summary>The fraction that a decimal literal such as 2.5 or 1e-3 denotes.</summary>
+    public static Rational Parse(string text)
+    {
+        var lower = text.ToLowerInvariant();
+        var exponent = 0;
+        var e = lower.IndexOf('e');
+        if (e >= 0)
+        {
+            exponent = int.Parse(lower.Substring(e + 1), NumberStyles.AllowLeadingSign, CultureInfo.InvariantCulture);
+            lower = lower.Substring(0, e);
+        }
+
+        var point = lower.IndexOf('.');
+        if (point >= 0)
+        {
+            exponent -= lower.Length - point - 1;
+            lower = lower.Remove(point, 1);
+        }
+
+        var digits = BigInteger.Parse(lower, NumberStyles.AllowLeadingSign, CultureInfo.InvariantCulture);
+        return exponent >= 0 ? new(digits * BigInteger.Pow(10, exponent), 1) : new(digits, BigInteger.Pow(10, -exponent));
+    }
+
+    public int CompareTo(Rational other) => (Numerator * other.Denominator).CompareTo(other.Numerator * Denominator);
+
+    public bool Equals(Rational other) => Numerator == other.Numerator && _denominatorLessOne == other._denominatorLessOne;
+
+    public override bool Equals(object? obj) => obj is Rational other && Equals(other);
+
+    public override int GetHashCode() => unchecked((Numerator.GetHashCode() * 397) ^ _denominatorLessOne.GetHashCode());
+
+    public override string ToString() => IsInteger
+        ? Numerator.ToString(CultureInfo.InvariantCulture)
+        : Numerator.ToString(CultureInfo.InvariantCulture) + "/" + Denominator.ToString(CultureInfo.InvariantCulture);
+
+    private static long BitLength(BigInteger value)
+    {
+        var bytes = BigInteger.Abs(value).ToByteArray();
+        return bytes.Length * 8L;
+    }
+}
