@@ -1,3 +1,4 @@
+using System;
 using System.Collections.Immutable;
 
 namespace FamilyGen.Kernels;
@@ -42,4 +43,13 @@ public sealed record Domain
     /// <summary>Whether the exponent contains a function that could not be read: modes cannot then be proved complete,
     /// and a lattice is summed term by term.</summary>
     public bool IsOpaque { get; init; }
+
+    /// <summary>The point at an observation, as its own reference point.</summary>
+    public Point At(double x) => new()
+    {
+        X = x,
+        LogAboveLower = IsLattice || double.IsInfinity(Lower) ? double.NaN : Math.Log(x - Lower),
+        LogBelowUpper = IsLattice || double.IsInfinity(Upper) ? double.NaN : Math.Log(Upper - x),
+        Integer = IsLattice ? (long)x : 0,
+    };
 }

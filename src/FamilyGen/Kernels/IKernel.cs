@@ -14,6 +14,9 @@ public interface IKernel
     /// <summary>The number of sufficient statistics.</summary>
     static abstract int Count { get; }
 
+    /// <summary>The names of the natural parameters, in declared order.</summary>
+    static abstract ReadOnlySpan<string> NaturalNames { get; }
+
     /// <summary>The support, its pieces and its periodicity.</summary>
     Domain Domain { get; }
 
