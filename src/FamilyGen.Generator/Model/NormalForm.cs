@@ -3,7 +3,8 @@ using FamilyGen.Generator.Algebra;
 namespace FamilyGen.Generator.Model;
 
 /// <summary>coefficient · atom, where the coefficient is free of x (known values and constants only) and the atom is one
-/// of the algebra's irreducible functions of x.</summary>
+/// of the algebra's irreducible functions of x, or a product of them. The atom Number(1) carries the constant of a
+/// statistic; a piece is Conditional(condition, function, 0); log h = −∞ on a set is Conditional(set, Constant(−∞), 0).</summary>
 internal sealed record WeightedAtom(Expression Coefficient, Expression Atom);
 
 /// <summary>A function of the observation as a sum of weighted atoms.</summary>
@@ -13,19 +14,28 @@ internal sealed record AtomSum(EquatableArray<WeightedAtom> Terms);
 /// of the trade parameters and known values.</summary>
 internal sealed record Statistic(string Name, string Parameter, AtomSum Body, Expression? Natural);
 
-/// <summary>How one rank of the exponent at an end depends on θ: Σ weightⱼ θⱼ + constant. Weights are free of x and of
-/// parameters (they may use known values).</summary>
-internal sealed record RankRow(string Kind, double Order, EquatableArray<Expression> Weights, Expression Constant, string Text);
+/// <summary>How one rank of the exponent at an end depends on θ: Σ weightⱼ θⱼ + constant. Order, weights and constant are
+/// free of x and of parameters; they may use known values, so two rows can turn out to be of one rank at run time.</summary>
+internal sealed record RankRow(string Kind, Expression Order, EquatableArray<Expression> Weights, Expression Constant, string Text);
 
-/// <summary>The growth of the exponent at one end of one piece; <paramref name="StatisticKinds"/> and orders give the
-/// growth of each statistic and, last, of log h. Kinds are names of FamilyGen.Kernels.GrowthKind.</summary>
+/// <summary>How fast |f| grows at an end: the name of a FamilyGen.Kernels.GrowthKind and the order within it.</summary>
+internal sealed record GrowthRow(string Kind, Expression Order);
+
+/// <summary>The growth of the exponent at one end of one piece, strongest rank first as far as that can be told at compile
+/// time.</summary>
+/// <param name="Where">The end as a person would name it: "hours → ∞".</param>
+/// <param name="IsInfinite">Whether the end lies at ±∞.</param>
+/// <param name="IsUpper">Whether it is the upper end of its piece.</param>
+/// <param name="IsVerified">False where the growth argument does not reach: an opaque function, an unbounded oscillation.</param>
+/// <param name="Ranks">The ranks of the exponent.</param>
+/// <param name="Statistics">The growth of |T₀| … |T_{k−1}| and, last, of |log h|.</param>
 internal sealed record EndRow(
     string Where,
     bool IsInfinite,
     bool IsUpper,
+    bool IsVerified,
     EquatableArray<RankRow> Ranks,
-    EquatableArray<string> StatisticKinds,
-    EquatableArray<double> StatisticOrders);
+    EquatableArray<GrowthRow> Statistics);
 
 /// <summary>log p(x | θ) = Σ θⱼ Tⱼ(x) + log h(x) − A(θ), read off the declaration, and all that emission needs of it.</summary>
 /// <param name="Statistics">The statistics with their natural parameters.</param>
@@ -54,3 +64,7 @@ internal sealed record NormalForm(
     EquatableArray<Expression> Inverse,
     EquatableArray<double> ParameterLower,
     EquatableArray<double> ParameterUpper);
+
+/// <summary>Either a normal form or the reasons why there is none. Findings that do not stand in the way (a curved family)
+/// may accompany a form.</summary>
+internal sealed record NormalFormResult(NormalForm? Form, EquatableArray<Finding> Findings);
