@@ -56,6 +56,13 @@ internal readonly struct Rational : IEquatable<Rational>, IComparable<Rational>
 
     public static bool operator >(Rational a, Rational b) => a.CompareTo(b) > 0;
 
+    public static Rational Abs(Rational a) => a.Sign < 0 ? -a : a;
+
+    /// <summary>aⁿ for an integer n; a ≠ 0 when n is negative.</summary>
+    public static Rational Pow(Rational a, int n) => n >= 0
+        ? new(BigInteger.Pow(a.Numerator, n), BigInteger.Pow(a.Denominator, n))
+        : new(BigInteger.Pow(a.Denominator, -n), BigInteger.Pow(a.Numerator, -n));
+
     /// <summary>The nearest double.</summary>
     public double ToDouble()
     {

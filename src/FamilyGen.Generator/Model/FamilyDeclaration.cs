@@ -57,6 +57,9 @@ internal sealed record FamilyDeclaration(
     DeclaredMember? KernelMember,
     EquatableArray<TradeParameter> Parameters)
 {
+    /// <summary>The names of all members that the user's class has, so that a stub does not declare them again.</summary>
+    public EquatableArray<string> MemberNames { get; init; } = EquatableArray<string>.Empty;
+
     /// <summary>Whether the family is written with a kernel and trade parameters.</summary>
     public bool IsTrade => Kernel is not null;
 

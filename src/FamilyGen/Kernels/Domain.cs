@@ -1,4 +1,5 @@
 using System;
+using System.Collections.Generic;
 using System.Collections.Immutable;
 
 namespace FamilyGen.Kernels;
@@ -43,6 +44,37 @@ public sealed record Domain
     /// <summary>Whether the exponent contains a function that could not be read: modes cannot then be proved complete,
     /// and a lattice is summed term by term.</summary>
     public bool IsOpaque { get; init; }
+
+    /// <summary>The domain of a range of counts.</summary>
+    public static Domain Of(CountRange range) => new()
+    {
+        IsLattice = true,
+        Lower = range.Min ?? double.NegativeInfinity,
+        Upper = range.Max ?? double.PositiveInfinity,
+        LowerIncluded = range.Min is not null,
+        UpperIncluded = range.Max is not null,
+    };
+
+    /// <summary>The domain of an interval.</summary>
+    public static Domain Of(Interval range) => new()
+    {
+        IsLattice = false,
+        Lower = range.Lower,
+        Upper = range.Upper,
+        LowerIncluded = range.LowerIncluded,
+        UpperIncluded = range.UpperIncluded,
+        IsCircle = range.IsCircle,
+        Masses = range.Masses,
+    };
+
+    /// <summary>Breakpoints in the ascending order that the engine expects, each once.</summary>
+    public static ImmutableArray<double> Ascending(params ReadOnlySpan<double> points)
+    {
+        var sorted = new SortedSet<double>();
+        foreach (var point in points)
+            sorted.Add(point);
+        return [.. sorted];
+    }
 
     /// <summary>The point at an observation, as its own reference point.</summary>
     public Point At(double x) => new()
