@@ -1,57 +1,122 @@
 using System;
 using System.Collections.Immutable;
+using System.Globalization;
+using System.Linq;
 
 namespace FamilyGen.Kernels;
 
-/// <summary>The ranks of the asymptotic scale in which an exponent is expanded at an end of the support, from the
-/// strongest down. At an infinite end they are functions of |x| → ∞, at a finite end functions of 1/distance → ∞.</summary>
-public enum GrowthKind
-{
-    /// <summary>exp(order·|x|), order &gt; 0.</summary>
-    Exponential = 6,
-
-    /// <summary>|x|^order, order &gt; 1, or any order &gt; 0 above a logarithm.</summary>
-    Power = 5,
-
-    /// <summary>|x|^order · log |x|, order &gt; 0 (between |x|^order and higher powers).</summary>
-    PowerTimesLog = 4,
-
-    /// <summary>(log |x|)^order, order &gt; 1.</summary>
-    LogPower = 3,
-
-    /// <summary>log |x|.</summary>
-    Log = 2,
-
-    /// <summary>log log |x|.</summary>
-    LogLog = 1,
-
-    /// <summary>Bounded.</summary>
-    Bounded = 0,
-}
-
-/// <summary>How fast a function grows at an end.</summary>
-/// <param name="Kind">The rank of the scale.</param>
-/// <param name="Order">The exponent within the rank.</param>
-public readonly record struct Growth(GrowthKind Kind, double Order = 1);
-
-/// <summary>One rank of the exponent at an end: its coefficient there is Σ weightⱼθⱼ + constant.</summary>
-/// <param name="Growth">The function of x.</param>
-/// <param name="Weights">One weight for each natural parameter.</param>
-/// <param name="Constant">The contribution of the base measure.</param>
-/// <param name="Text">The coefficient as a person would write it: "1 − crowding".</param>
-public sealed record Rank(Growth Growth, ImmutableArray<double> Weights, double Constant, string Text);
-
-/// <summary>The expansion of the exponent at one end of one piece of the support, strongest rank first.</summary>
-/// <param name="Where">The end as a person would name it: "x → ∞", "x → 0".</param>
-/// <param name="IsInfinite">Whether the end lies at ±∞.</param>
-/// <param name="IsUpper">Whether it is the upper end.</param>
-/// <param name="Ranks">The ranks, strongest first; one that is absent has coefficient 0.</param>
-/// <param name="Statistics">The growth of |T₀| … |T_{k−1}|, |log h| at this end.</param>
-public sealed record EndGrowth(string Where, bool IsInfinite, bool IsUpper, ImmutableArray<Rank> Ranks, ImmutableArray<Growth> Statistics);
-
-/// <summary>The set of natural parameters: those for which every end of the support converges.</summary>
+/// <summary>The set of natural parameters: those for which the integral of the exponential converges at every end of the
+/// support and of its pieces.</summary>
 public sealed class NaturalSet(ImmutableArray<EndGrowth> ends)
 {
+    private readonly EndScale[] _scales = [.. ends.Select(end => new EndScale(end))];
+
     /// <summary>The ends of the support and of its pieces.</summary>
     public ImmutableArray<EndGrowth> Ends { get; } = ends;
+
+    /// <summary>Whether the normalizer is finite at θ.</summary>
+    public bool Contains(ReadOnlySpan<double> theta) => IsFinite(theta, default, default);
+
+    /// <summary>Whether the normalizer is finite in a whole neighbourhood of θ.</summary>
+    public bool IsInterior(ReadOnlySpan<double> theta)
+    {
+        foreach (var scale in _scales)
+            if (scale.Decide(theta) is not { Converges: true, IsStrict: true })
+                return false;
+        return AllFinite(theta);
+    }
+
+    /// <summary>Whether ∫ |factor|·exp(exponent) is finite, for a factor that grows as stated at lower and upper ends.</summary>
+    public bool IsFinite(ReadOnlySpan<double> theta, Growth lowerFactor, Growth upperFactor)
+    {
+        foreach (var scale in _scales)
+            if (!scale.Decide(theta, scale.End.IsUpper ? upperFactor : lowerFactor, 1).Converges)
+                return false;
+        return AllFinite(theta);
+    }
+
+    /// <summary>Whether the moment E|Tⱼ|^power is finite; the index after the last statistic stands for log h.</summary>
+    public bool IsMomentFinite(ReadOnlySpan<double> theta, int statistic, int power)
+    {
+        foreach (var scale in _scales)
+            if (!scale.Decide(theta, scale.End.Statistics[statistic], power).Converges)
+                return false;
+        return AllFinite(theta);
+    }
+
+    /// <summary>Whether the moment E|Tᵢ·Tⱼ| is finite; the index after the last statistic stands for log h.</summary>
+    public bool IsProductFinite(ReadOnlySpan<double> theta, int first, int second)
+    {
+        foreach (var scale in _scales)
+            if (!scale.Decide(theta, scale.End.Statistics[first], 1, scale.End.Statistics[second], 1).Converges)
+                return false;
+        return AllFinite(theta);
+    }
+
+    /// <summary>Whether the moment E|x|^power of the observation itself is finite.</summary>
+    public bool IsObservationMomentFinite(ReadOnlySpan<double> theta, double power)
+    {
+        foreach (var scale in _scales)
+            if (!scale.Decide(theta, scale.End.IsInfinite ? Growth.Linear : default, power).Converges)
+                return false;
+        return AllFinite(theta);
+    }
+
+    /// <summary>The condition that θ fails, as a sentence with the values that fail it; null when θ belongs to the set.</summary>
+    public string? Violation(ReadOnlySpan<double> theta)
+    {
+        for (var j = 0; j < theta.Length; j++)
+            if (!double.IsFinite(theta[j]))
+                return string.Create(CultureInfo.InvariantCulture, $"natural parameter {j + 1} is {theta[j]}");
+        foreach (var scale in _scales)
+            if (!scale.Decide(theta).Converges)
+                return Violation(scale, theta);
+        return null;
+    }
+
+    /// <summary>The hyperplanes that limit the set, one for each end that does not converge for every θ.</summary>
+    public ImmutableArray<Wall> Walls() => [.. _scales.Select(scale => WallFrom(scale, 0).Wall).OfType<Wall>()];
+
+    private static bool AllFinite(ReadOnlySpan<double> theta)
+    {
+        foreach (var value in theta)
+            if (!double.IsFinite(value))
+                return false;
+        return true;
+    }
+
+    // the first level at or below this one that parameters move, or the verdict of those that they do not
+    private static (WallMembership Membership, Wall? Wall) WallFrom(EndScale scale, int first)
+    {
+        for (var i = first; i < scale.Levels.Length; i++)
+        {
+            var level = scale.Levels[i];
+            if (!level.IsFixed)
+            {
+                var (membership, refinement) = WallFrom(scale, i + 1);
+                var wall = new Wall(
+                    scale.End.Where, level.Weights, level.Constant, level.Bound, level.Text, membership, refinement);
+                return (WallMembership.Conditional, wall);
+            }
+
+            if (level.Constant != level.Bound)
+                return (level.Constant < level.Bound ? WallMembership.Included : WallMembership.Excluded, null);
+        }
+
+        return (WallMembership.Excluded, null);
+    }
+
+    private static string Violation(EndScale scale, ReadOnlySpan<double> theta)
+    {
+        if (WallFrom(scale, 0).Wall is not { } outer)
+            return $"the normalizer is infinite at {scale.End.Where} for every parameter";
+        var values = "";
+        for (var wall = outer; wall is not null; wall = wall.Value(theta) == 0 ? wall.Refinement : null)
+        {
+            var value = CoefficientLevel.Excess(wall.Weights, theta, wall.Constant, 0);
+            values += string.Create(CultureInfo.InvariantCulture, $"{(values == "" ? "" : " and ")}{wall.Text} = {value}");
+        }
+
+        return $"the normalizer is finite at {scale.End.Where} only if {outer.Condition}; here {values}";
+    }
 }
