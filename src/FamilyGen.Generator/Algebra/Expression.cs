@@ -64,7 +64,9 @@ internal enum Function
 /// LogGamma(x + 1); BinomialLn(n, k) is three of them.</summary>
 internal sealed record Call(Function Function, EquatableArray<Expression> Arguments) : Expression;
 
-/// <summary>A pure function that the reader knows nothing about: <paramref name="Text"/> is its fully qualified C# name.</summary>
+/// <summary>A pure function that the reader knows nothing about. <paramref name="Text"/> is the C# expression of type double
+/// that evaluates it, fully qualified, with {0}, {1} … in place of its arguments (formulas of type double):
+/// "(double)global::Harbour.Tides.Level((int)({0}))".</summary>
 internal sealed record Opaque(string Text, EquatableArray<Expression> Arguments) : Expression;
 
 internal sealed record Conditional(Condition Condition, Expression WhenTrue, Expression WhenFalse) : Expression;
