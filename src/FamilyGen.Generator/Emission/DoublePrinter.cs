@@ -35,7 +35,8 @@ internal sealed class DoublePrinter(string real, string? integer, Func<Symbol, s
     }
 
     protected override string OpaqueText(Opaque opaque) =>
-        $"global::{opaque.Text}({string.Join(", ", opaque.Arguments.Select(a => InIntegers(a) ?? Print(a)))})";
+        opaque.Arguments.Select((a, i) => (Place: $"{{{i}}}", Text: InIntegers(a) ?? Print(a)))
+            .Aggregate(opaque.Text, (text, argument) => text.Replace(argument.Place, argument.Text));
 
     protected override string PowerText(Expression @base, Expression exponent) => exponent switch
     {
