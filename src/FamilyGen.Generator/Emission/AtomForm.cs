@@ -74,7 +74,7 @@ internal readonly record struct AtomForm(string? Slope, string? Residual)
         var log = new Call(Function.Log, EquatableArray.Of(w.Whole));
         var slope = $"{Times(w, text)}({text.AtM.Print(log)} + 1)";
         return new(slope, text.EndRatio(w) is { } ratio
-            ? $"{Library}.XLogXAtEnd({At(w, text)}, {text.AtM.Print(log)}, {ratio})"
+            ? $"{Library}.XLogXAtEnd({At(w, text)}, {ratio})"
             : $"{Library}.XLogX({At(w, text)}, {Step(w, text)})");
     }
 
