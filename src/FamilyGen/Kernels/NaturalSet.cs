@@ -75,7 +75,7 @@ public sealed class NaturalSet(ImmutableArray<EndGrowth> ends)
     }
 
     /// <summary>The hyperplanes that limit the set, one for each end that does not converge for every θ.</summary>
-    public ImmutableArray<Wall> Walls() => [.. _scales.Select(scale => WallFrom(scale, 0).Wall).OfType<Wall>()];
+    public ImmutableArray<Wall> Walls() => [.. _scales.Select(scale => WallFrom(scale, 0, new()).Wall).OfType<Wall>()];
 
     private static bool AllFinite(ReadOnlySpan<double> theta)
     {
@@ -85,22 +85,23 @@ public sealed class NaturalSet(ImmutableArray<EndGrowth> ends)
         return true;
     }
 
-    // the first level at or below this one that parameters move, or the verdict of those that they do not
-    private static (WallMembership Membership, Wall? Wall) WallFrom(EndScale scale, int first)
+    // The first level from here on that parameters still move where the levels above it meet their bounds, or the
+    // verdict of the first one that they do not move.
+    private static (WallMembership Membership, Wall? Wall) WallFrom(EndScale scale, int first, Equalities met)
     {
         for (var i = first; i < scale.Levels.Length; i++)
         {
             var level = scale.Levels[i];
-            if (!level.IsFixed)
+            if (met.Add(level.Weights.AsSpan(), level.Constant - level.Bound) is not { } excess)
             {
-                var (membership, refinement) = WallFrom(scale, i + 1);
+                var (membership, refinement) = WallFrom(scale, i + 1, met);
                 var wall = new Wall(
                     scale.End.Where, level.Weights, level.Constant, level.Bound, level.Text, membership, refinement);
                 return (WallMembership.Conditional, wall);
             }
 
-            if (level.Constant != level.Bound)
-                return (level.Constant < level.Bound ? WallMembership.Included : WallMembership.Excluded, null);
+            if (excess != 0)
+                return (excess < 0 ? WallMembership.Included : WallMembership.Excluded, null);
         }
 
         return (WallMembership.Excluded, null);
@@ -108,7 +109,7 @@ public sealed class NaturalSet(ImmutableArray<EndGrowth> ends)
 
     private static string Violation(EndScale scale, ReadOnlySpan<double> theta)
     {
-        if (WallFrom(scale, 0).Wall is not { } outer)
+        if (WallFrom(scale, 0, new()).Wall is not { } outer)
             return $"the normalizer is infinite at {scale.End.Where} for every parameter";
         var values = "";
         for (var wall = outer; wall is not null; wall = wall.Value(theta) == 0 ? wall.Refinement : null)

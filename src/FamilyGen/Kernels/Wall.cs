@@ -44,7 +44,7 @@ public sealed record Wall(
     {
         get
         {
-            var bound = Bound.ToString(CultureInfo.InvariantCulture).Replace('-', '−');
+            var bound = Bound.ToString(CultureInfo.InvariantCulture);
             return Membership switch
             {
                 WallMembership.Excluded => $"{Text} < {bound}",
