@@ -1,0 +1,131 @@
+using System.Collections.Generic;
+using System.Linq;
+using FamilyGen.Generator.Model;
+
+namespace FamilyGen.Generator.Algebra;
+
+/// <summary>From a declaration as it was read to the normal form log p(x | θ) = Σ θⱼTⱼ(x) + log h(x) − A(θ), or to the reasons
+/// why there is none. Never throws, and its work is bounded.</summary>
+/// <remarks>Arguments of the findings: FG0101 (condition and what happens there, parameter names); FG0501 (the factor that
+/// ties, its part in x, parameter names, what would mend it); FG0502 (number of parameters, number of statistics, their
+/// names); FG0503 (names of the parameters that cannot be told apart).</remarks>
+internal static class Normalizer
+{
+    private const int MostNodes = 5000;
+    private const int DeepestNesting = 250;
+
+    public static NormalFormResult Normalize(FamilyDeclaration declaration)
+    {
+        var bodies = declaration.Statistics.Select(s => s.Body).ToList();
+        if (declaration.Kernel is not null)
+            bodies.Add(declaration.Kernel);
+        if (declaration.BaseMeasure is not null)
+            bodies.Add(declaration.BaseMeasure.Body);
+        foreach (var body in bodies)
+        {
+            if (!IsManageable(body))
+            {
+                return Refused(new Finding("FG0501", body.Origin, EquatableArray.Of(
+                    "the formula", declaration.ObservationName, string.Join(", ", declaration.Parameters.Select(p => p.Name)), "write a shorter formula")));
+            }
+        }
+
+        var expander = new Expander(new Scope(declaration));
+        return declaration.IsTrade ? Trade(declaration, expander) : Canonical(declaration, expander);
+    }
+
+    private static NormalFormResult Canonical(FamilyDeclaration declaration, Expander expander)
+    {
+        var observation = expander.Scope.Observation;
+        var statistics = declaration.Statistics
+            .Select(s => new Statistic(s.Name, s.Parameter, AtomSums.Of(expander.Expand(s.Body), observation, withConstant: true), null))
+            .ToList();
+        var logBase = AtomSums.Of(LogBase(declaration, expander), observation, withConstant: true);
+        return Form(declaration, expander, statistics, logBase, EquatableArray<Expression>.Empty, null, new List<Finding>());
+    }
+
+    private static Polynomial LogBase(FamilyDeclaration declaration, Expander expander) => declaration.BaseMeasure switch
+    {
+        null => Polynomial.Zero,
+        { IsLogarithm: true, Body: var body } => expander.Expand(body),
+        { Body: var body } => expander.Expand(Formula.Log(body)),
+    };
+
+    private static NormalFormResult Trade(FamilyDeclaration declaration, Expander expander)
+    {
+        var kernel = Separation.Separated(expander.Expand(declaration.Kernel!));
+        var findings = expander.Findings.Concat(Separation.Findings(kernel, declaration.ObservationName, expander.IsExhausted)).ToList();
+        if (findings.Count > 0)
+            return Refused(findings.ToArray());
+
+        var form = TradeForm.Of(kernel);
+        var names = new StatisticNames(declaration.Parameters.Select(p => p.Name).Concat(declaration.Known.Select(k => k.Name)));
+        var statistics = new List<Statistic>();
+        foreach (var part in form.Parts)
+        {
+            var body = AtomSums.Of(part.Statistic, expander.Scope.Observation, withConstant: false);
+            var name = names.Next(body);
+            statistics.Add(new Statistic(StatisticNames.Capital(name), name, body, part.Natural.ToExpression().WithoutOrigins()));
+        }
+
+        var parameters = declaration.Parameters.Select(p => p.Name).ToList();
+        var rank = ParameterMap.Rank(statistics.Select(s => s.Natural!).ToList(), parameters, expander.Scope);
+        if (rank is { } found && found.Rank < parameters.Count)
+            return Refused(new Finding("FG0503", declaration.Kernel!.Origin, EquatableArray.Of(string.Join(", ", found.Free))));
+        if (parameters.Count < statistics.Count)
+        {
+            findings.Add(new Finding("FG0502", declaration.Kernel!.Origin, EquatableArray.Of(
+                Count(parameters.Count), Count(statistics.Count), string.Join(", ", statistics.Select(s => Rendering.Text(s.Body))))));
+        }
+
+        var ranges = ParameterRanges.Of(kernel, expander.Scope, parameters);
+        var logBase = AtomSums.Of(form.LogBase, expander.Scope.Observation, withConstant: false);
+        return Form(declaration, expander, statistics, logBase, EquatableArray<Expression>.Empty, ranges, findings);
+    }
+
+    private static NormalFormResult Form(
+        FamilyDeclaration declaration,
+        Expander expander,
+        List<Statistic> statistics,
+        AtomSum logBase,
+        EquatableArray<Expression> inverse,
+        ParameterRanges? ranges,
+        List<Finding> findings)
+    {
+        var form = new NormalForm(
+            statistics.ToEquatableArray(),
+            logBase,
+            EquatableArray<Expression>.Empty,
+            Formula.One,
+            false,
+            false,
+            false,
+            EquatableArray<EndRow>.Empty,
+            "",
+            inverse,
+            declaration.Parameters.Select(p => ranges!.Lower(p.Name)).ToEquatableArray(),
+            declaration.Parameters.Select(p => ranges!.Upper(p.Name)).ToEquatableArray());
+        return new NormalFormResult(form, findings.ToEquatableArray());
+    }
+
+    private static NormalFormResult Refused(params Finding[] findings) => new(null, findings.ToEquatableArray());
+
+    private static string Count(int value) => value.ToString(System.Globalization.CultureInfo.InvariantCulture);
+
+    // Counted without recursion, so that a formula of absurd depth cannot exhaust the stack.
+    private static bool IsManageable(Expression body)
+    {
+        var stack = new Stack<(Expression Node, int Depth)>();
+        stack.Push((body, 0));
+        for (var nodes = 0; stack.Count > 0; nodes++)
+        {
+            var (node, depth) = stack.Pop();
+            if (nodes > MostNodes || depth > DeepestNesting)
+                return false;
+            foreach (var child in node.Children())
+                stack.Push((child, depth + 1));
+        }
+
+        return true;
+    }
+}
