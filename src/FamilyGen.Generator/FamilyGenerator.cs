@@ -1,4 +1,11 @@
+using System.Text;
+using FamilyGen.Generator.Emission;
+using FamilyGen.Generator.Model;
+using FamilyGen.Generator.Reading;
+using FamilyGen.Generator.Verdicts;
 using Microsoft.CodeAnalysis;
+using Microsoft.CodeAnalysis.CSharp.Syntax;
+using Microsoft.CodeAnalysis.Text;
 
 namespace FamilyGen.Generator;
 
@@ -6,8 +13,49 @@ namespace FamilyGen.Generator;
 [Generator(LanguageNames.CSharp)]
 public sealed class FamilyGenerator : IIncrementalGenerator
 {
+    /// <summary>The names by which the steps are tracked.</summary>
+    internal static class Steps
+    {
+        public const string Read = "Read";
+        public const string Judge = "Judge";
+        public const string Emit = "Emit";
+    }
+
     /// <inheritdoc/>
     public void Initialize(IncrementalGeneratorInitializationContext context)
     {
+        var readings = context.SyntaxProvider
+            .ForAttributeWithMetadataName(
+                FamilyReader.FamilyAttribute,
+                static (node, _) => node is TypeDeclarationSyntax,
+                static (found, cancellation) => FamilyReader.Read(found.SemanticModel.Compilation, (INamedTypeSymbol)found.TargetSymbol, cancellation).Reading)
+            .WithTrackingName(Steps.Read);
+
+        var judgements = readings
+            .Select(static (reading, _) => Judgement.Of(reading))
+            .WithTrackingName(Steps.Judge);
+
+        var sources = judgements
+            .Select(static (judgement, _) => GeneratedFile.Of(judgement))
+            .WithTrackingName(Steps.Emit);
+
+        context.RegisterSourceOutput(sources, static (output, file) =>
+        {
+            if (file is not null)
+                output.AddSource(file.HintName, SourceText.From(file.Text, Encoding.UTF8));
+        });
+    }
+
+    private sealed record GeneratedFile(string HintName, string Text)
+    {
+        /// <summary>The family's code, stubs where the declaration is refused, nothing where it cannot be added to.</summary>
+        public static GeneratedFile? Of(Judgement judgement)
+        {
+            if (!judgement.Reading.CanBeCompleted)
+                return null;
+            var declaration = judgement.Reading.Declaration;
+            var text = judgement.Form is { } form ? FamilyEmitter.Emit(declaration, form) : FamilyEmitter.EmitStub(declaration);
+            return new GeneratedFile(declaration.MetadataName + ".g.cs", text);
+        }
     }
 }

@@ -33,7 +33,11 @@ internal sealed record Dependency(
     string Name,
     string Reason,
     int Origin,
-    EquatableArray<string> Path);
+    EquatableArray<string> Path)
+{
+    /// <summary>"Range → Lowest → Shape".</summary>
+    public string PathText => string.Join(" → ", Path);
+}
 
 internal enum NamedPieceKind
 {

@@ -178,7 +178,7 @@ internal sealed partial class OperationReader
     private NumberValue Generated(IOperation use, ISymbol member)
     {
         var origin = session.Mark(use.Syntax);
-        if (GeneratedFace.IsReserved(member.Name) && !GeneratedFace.DependsOnParameters(member.Name))
+        if (GeneratedNames.IsReserved(member.Name) && !GeneratedNames.DependsOnParameters(member.Name))
         {
             session.Refuse(origin, ShapeFault.GeneratedMember(member.Name));
             return new NumberValue(Placeholder(origin));

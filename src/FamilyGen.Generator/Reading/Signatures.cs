@@ -46,12 +46,12 @@ internal sealed class Signatures
         var name = statistic.Data.NamedArguments.FirstOrDefault(a => a.Key == "Parameter").Value.Value as string;
         if (name is null)
         {
-            name = GeneratedFace.ParameterName(statistic.Symbol.Name);
+            name = GeneratedNames.ParameterOf(statistic.Symbol.Name);
         }
         else if (!SyntaxFacts.IsValidIdentifier(name))
         {
             _session.Refuse(_session.Mark(statistic.Symbol), ShapeFault.BadParameterName(name));
-            name = GeneratedFace.ParameterName(statistic.Symbol.Name);
+            name = GeneratedNames.ParameterOf(statistic.Symbol.Name);
         }
 
         _session.Name(name, NamedPieceKind.NaturalParameter, _session.Mark(statistic.Symbol));

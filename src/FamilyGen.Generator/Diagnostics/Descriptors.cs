@@ -1,0 +1,79 @@
+using System.Collections.Generic;
+using System.Collections.Immutable;
+using System.Linq;
+using Microsoft.CodeAnalysis;
+
+namespace FamilyGen.Generator.Diagnostics;
+
+/// <summary>All diagnostics: what they say, and how severe they are. Each has a help page by its id.</summary>
+internal static class Descriptors
+{
+    private const string HelpPages = "src/FamilyGen.Generator/Diagnostics/help/";
+
+    public static readonly DiagnosticDescriptor Shape = Error(
+        DiagnosticIds.Shape,
+        "The declaration has the wrong shape",
+        "{0}");
+
+    public static readonly DiagnosticDescriptor NameCollision = Error(
+        DiagnosticIds.NameCollision,
+        "A name collides with a generated one or hides a function",
+        "The name '{0}' cannot be used here: {1}; choose another name");
+
+    public static readonly DiagnosticDescriptor NearlyEqualKnown = Warning(
+        DiagnosticIds.NearlyEqualKnown,
+        "Two known values nearly agree",
+        "The known values '{0}' and '{1}' nearly agree and are probably one; give them one name and one type");
+
+    public static readonly DiagnosticDescriptor SupportOnParameter = Error(
+        DiagnosticIds.SupportOnParameter,
+        "The support depends on a parameter",
+        "The support depends on the parameter '{0}' ({1}), so an observation that is possible for one value of '{0}' is impossible for another, and this is no exponential family; bound the support by constants or by [Known] values");
+
+    public static readonly DiagnosticDescriptor SupportChanges = Error(
+        DiagnosticIds.SupportChanges,
+        "The support depends on something that can change",
+        "The support depends on '{0}' ({1}), which is {2}, so an observation that is possible now may be impossible later; use a constant, a static readonly field or a [Known] value");
+
+    public static readonly DiagnosticDescriptor SupportEmpty = Error(
+        DiagnosticIds.SupportEmpty,
+        "The support leaves nothing to observe",
+        "The support {0}; {1}");
+
+    public static readonly DiagnosticDescriptor StatisticOnParameter = Error(
+        DiagnosticIds.StatisticOnParameter,
+        "A statistic or base measure depends on a parameter",
+        "'{0}' depends on the parameter '{1}' ({2}), but it must be a function of the observation alone; mark '{1}' as [Known] if it is never estimated, or write the family as a [LogKernel] with '{1}' among its parameters");
+
+    public static readonly DiagnosticDescriptor Impure = Error(
+        DiagnosticIds.Impure,
+        "A statistic, base measure or kernel is not a pure function",
+        "'{0}' depends on '{1}' ({2}), which is {3}, so the same observation need not give the same value twice; use constants, static readonly fields or [Known] values");
+
+    public static readonly DiagnosticDescriptor NotSeparable = Error(
+        DiagnosticIds.NotSeparable,
+        "The kernel does not separate",
+        "{0}");
+
+    public static readonly DiagnosticDescriptor NotIdentified = Error(
+        DiagnosticIds.NotIdentified,
+        "The trade parameters cannot be told apart",
+        "{0}");
+
+    /// <summary>All of them, in the order of their ids.</summary>
+    public static ImmutableArray<DiagnosticDescriptor> All { get; } =
+    [
+        Shape, NameCollision, NearlyEqualKnown, SupportOnParameter, SupportChanges, SupportEmpty, StatisticOnParameter, Impure,
+        NotSeparable, NotIdentified,
+    ];
+
+    /// <summary>By id.</summary>
+    public static IReadOnlyDictionary<string, DiagnosticDescriptor> ById { get; } = All.ToDictionary(d => d.Id);
+
+    private static DiagnosticDescriptor Error(string id, string title, string message) => Describe(id, title, message, DiagnosticSeverity.Error);
+
+    private static DiagnosticDescriptor Warning(string id, string title, string message) => Describe(id, title, message, DiagnosticSeverity.Warning);
+
+    private static DiagnosticDescriptor Describe(string id, string title, string message, DiagnosticSeverity severity) => new(
+        id, title, message, "FamilyGen", severity, isEnabledByDefault: true, helpLinkUri: HelpPages + id + ".md");
+}

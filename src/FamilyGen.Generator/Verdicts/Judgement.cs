@@ -1,0 +1,48 @@
+using System;
+using System.Collections.Generic;
+using System.Linq;
+using FamilyGen.Generator.Diagnostics;
+using FamilyGen.Generator.Model;
+
+namespace FamilyGen.Generator.Verdicts;
+
+/// <summary>A reading with everything that was found about it, and its normal form where nothing stands in the way.</summary>
+internal sealed record Judgement(FamilyReading Reading, NormalForm? Form, EquatableArray<Finding> Findings)
+{
+    private static readonly Func<FamilyReading, IEnumerable<Finding>>[] s_rules =
+    [
+        ShapeRule.Find,
+        NameRule.Find,
+        KnownValueRule.Find,
+        MovingSupportRule.Find,
+        ChangingSupportRule.Find,
+        EmptySupportRule.Find,
+        ParameterRule.Find,
+        PurityRule.Find,
+    ];
+
+    /// <summary>Applies all rules.</summary>
+    public static Judgement Of(FamilyReading reading)
+    {
+        var findings = s_rules.SelectMany(rule => rule(reading)).ToList();
+        if (!reading.IsReadable || findings.Any(f => Severities.IsError(f.Id)))
+            return new Judgement(reading, null, Causes(findings));
+        var result = FormOf(reading.Declaration);
+        findings.AddRange(result.Findings);
+        return new Judgement(reading, findings.Any(f => Severities.IsError(f.Id)) ? null : result.Form, Causes(findings));
+    }
+
+    /// <summary>Of errors only those of the first stage in which there are any: shape before support before statistics
+    /// before measure before normalizer. What is wrong later may only follow from them.</summary>
+    private static EquatableArray<Finding> Causes(List<Finding> findings)
+    {
+        var stage = findings.Where(f => Severities.IsError(f.Id)).Select(Stage).OrderBy(s => s, StringComparer.Ordinal).FirstOrDefault();
+        return findings.Where(f => !Severities.IsError(f.Id) || Stage(f) == stage).Distinct()
+            .OrderBy(f => f.Id, StringComparer.Ordinal).ThenBy(f => f.Origin).ToEquatableArray();
+    }
+
+    private static string Stage(Finding finding) => finding.Id.Substring(0, 4);
+
+    private static NormalFormResult FormOf(FamilyDeclaration declaration) =>
+        new(null, EquatableArray<Finding>.Empty);
+}

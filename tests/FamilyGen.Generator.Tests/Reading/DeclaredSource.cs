@@ -1,0 +1,83 @@
+using System.Collections.Immutable;
+using System.Linq;
+using System.Threading;
+using Basic.Reference.Assemblies;
+using FamilyGen.Generator.Model;
+using FamilyGen.Generator.Reading;
+using FamilyGen.Generator.Verdicts;
+using Microsoft.CodeAnalysis;
+using Microsoft.CodeAnalysis.CSharp;
+
+namespace FamilyGen.Generator.Tests.Reading;
+
+/// <summary>Declarations as source text, and what is read and found in them.</summary>
+internal static class DeclaredSource
+{
+    public const string Usings = """
+        using System;
+        using FamilyGen;
+        using static System.Math;
+        using static MathNet.Numerics.SpecialFunctions;
+
+        """;
+
+    public static readonly CSharpParseOptions Parse = new(LanguageVersion.Latest);
+
+    public static readonly ImmutableArray<MetadataReference> References =
+    [
+        .. Net100.References.All,
+        MetadataReference.CreateFromFile(typeof(FamilyAttribute).Assembly.Location),
+        MetadataReference.CreateFromFile(typeof(MathNet.Numerics.SpecialFunctions).Assembly.Location),
+    ];
+
+    /// <summary>A compilation of the sources, each with the usual usings in front.</summary>
+    public static CSharpCompilation Compile(params string[] sources) => CSharpCompilation.Create(
+        "Harbour",
+        sources.Select((s, i) => CSharpSyntaxTree.ParseText(Usings + s, Parse, $"Harbour{i}.cs")),
+        References,
+        new CSharpCompilationOptions(OutputKind.DynamicallyLinkedLibrary, nullableContextOptions: NullableContextOptions.Enable));
+
+    /// <summary>Reads the only family in the sources.</summary>
+    public static (FamilyReading Reading, ImmutableArray<Location> Locations) Read(params string[] sources) =>
+        Read(Compile(sources));
+
+    public static (FamilyReading Reading, ImmutableArray<Location> Locations) Read(Compilation compilation) =>
+        FamilyReader.Read(compilation, Family(compilation), CancellationToken.None);
+
+    /// <summary>A declaration that reads without any finding.</summary>
+    public static FamilyDeclaration ReadValid(params string[] sources)
+    {
+        var (reading, _) = Read(sources);
+        Assert.True(reading.IsReadable);
+        Assert.Empty(Judgement.Of(reading).Findings);
+        return reading.Declaration;
+    }
+
+    /// <summary>The findings as "FG0101 at `shape`: message".</summary>
+    public static string[] Findings(params string[] sources)
+    {
+        var (reading, locations) = Read(sources);
+        return Judgement.Of(reading).Findings.Select(f => f.Id + " at `" + Text(locations[f.Origin]) + "`").ToArray();
+    }
+
+    /// <summary>The formula that a body of the given text is read as, with an observation x of the type.</summary>
+    public static string Formula(string body, string type = "double", string members = "")
+    {
+        var support = type == "double" ? "Interval Range => Interval.RealLine" : "CountRange Range => CountRange.AllIntegers";
+        var block = body.Contains("return") ? "{ " + body + " }" : "=> " + body + ";";
+        var declaration = ReadValid($$"""
+            [Family] public partial class Stoppages
+            {
+                [Support] static {{support}};
+                [SufficientStatistic] static double T({{type}} x) {{block}}
+                {{members}}
+            }
+            """);
+        return FormulaText.Of(declaration.Statistics[0].Body);
+    }
+
+    public static string Text(Location location) => location.SourceTree!.GetText().ToString(location.SourceSpan);
+
+    private static INamedTypeSymbol Family(Compilation compilation) => compilation.GetSymbolsWithName(_ => true, SymbolFilter.Type)
+        .OfType<INamedTypeSymbol>().Single(t => t.GetAttributes().Any(a => a.AttributeClass?.Name == "FamilyAttribute"));
+}
