@@ -1,0 +1,143 @@
+using System;
+using FamilyGen.Kernels;
+
+namespace FamilyGen.Partition;
+
+/// <summary>The exponent f = Σ θⱼTⱼ + log h about a reference point m.</summary>
+/// <remarks>f(x) − f(m) = s·d + Σ θⱼrⱼ + r_h with d = x − m, the residuals r of the kernel and the tangent
+/// s = Σ θⱼ slopeⱼ + slope_h, which nearly vanishes at a mode and is therefore summed in compensated arithmetic. Far from m
+/// the two parts may cancel; the plain difference of values is then the better one and is taken.</remarks>
+internal sealed class Expansion<TKernel>
+    where TKernel : struct, IKernel
+{
+    // Parts beyond this size, in units of the exponent, make the plain difference worth a look.
+    private const double LargePart = 256;
+
+    private readonly TKernel _kernel;
+    private readonly double[] _theta;
+    private readonly double[] _slope;
+    private readonly double[] _value;
+    private readonly double[] _remainder;
+    private readonly double _tangent;
+    private readonly CompensatedSum _level;
+
+    public Expansion(TKernel kernel, double[] theta, Frame frame, long integer)
+    {
+        (_kernel, _theta, Frame) = (kernel, theta, frame);
+        var count = TKernel.Count;
+        _slope = new double[count + 1];
+        _value = new double[count + 1];
+        _remainder = new double[count + 1];
+        var m = frame.Reference with { Integer = integer };
+        Reference = m;
+        _kernel.Evaluate(m, _value, _remainder);
+        _kernel.Slopes(m, _slope);
+        CompensatedSum tangent = default, level = default;
+        for (var j = 0; j <= count; j++)
+        {
+            var factor = j < count ? theta[j] : 1;
+            if (factor == 0)
+                continue;
+            tangent.AddProduct(factor, _slope[j]);
+            level.AddProduct(factor, _value[j]);
+            level.AddProduct(factor, _remainder[j]);
+        }
+
+        _tangent = tangent.Value;
+        _level = level;
+    }
+
+    /// <summary>The place of points relative to m.</summary>
+    public Frame Frame { get; }
+
+    /// <summary>The reference point m.</summary>
+    public Point Reference { get; }
+
+    /// <summary>f(m).</summary>
+    public CompensatedSum Level => _level;
+
+    /// <summary>The slopes of the functions at m.</summary>
+    public ReadOnlySpan<double> Slopes => _slope;
+
+    /// <summary>Whether the exponent and its slopes at m are numbers, so that m can serve as a reference.</summary>
+    public bool IsUsable
+    {
+        get
+        {
+            foreach (var slope in _slope)
+            {
+                if (!double.IsFinite(slope))
+                    return false;
+            }
+
+            foreach (var value in _value)
+            {
+                if (!double.IsFinite(value))
+                    return false;
+            }
+
+            return true;
+        }
+    }
+
+    /// <summary>Tⱼ(m), rounded, and log h(m) last.</summary>
+    public ReadOnlySpan<double> Values => _value;
+
+    /// <summary>f(x) − f(m), with the residuals rⱼ(x) and the differences Tⱼ(x) − Tⱼ(m).</summary>
+    public double Difference(in Point x, Span<double> residual, Span<double> difference)
+    {
+        _kernel.Residuals(Reference, x, residual);
+        var displacement = x.Displacement;
+        var count = _theta.Length;
+        var exponent = _tangent == 0 ? 0 : _tangent * displacement;
+        var size = Math.Abs(exponent);
+        var isCancelled = false;
+        for (var j = 0; j <= count; j++)
+        {
+            var r = residual[j];
+            var linear = _slope[j] == 0 ? 0 : _slope[j] * displacement;
+            var total = linear + r;
+            difference[j] = total;
+            if (!(Math.Abs(linear) <= 16 * Math.Abs(total)))
+                isCancelled = true;
+            var factor = j < count ? _theta[j] : 1;
+            if (factor == 0)
+                continue;
+            var term = factor * r;
+            exponent += term;
+            size += Math.Abs(term);
+        }
+
+        return !isCancelled && (size <= LargePart || size <= 2 * Math.Abs(exponent))
+            ? exponent
+            : PlainDifference(x, exponent, size, residual, difference);
+    }
+
+    private double PlainDifference(in Point x, double exponent, double size, ReadOnlySpan<double> residual, Span<double> difference)
+    {
+        var count = _theta.Length;
+        Span<double> value = stackalloc double[count + 1];
+        Span<double> remainder = stackalloc double[count + 1];
+        _kernel.Evaluate(x, value, remainder);
+        double plain = 0, plainSize = 0;
+        for (var j = 0; j <= count; j++)
+        {
+            var linear = _slope[j] == 0 ? 0 : Math.Abs(_slope[j] * x.Displacement);
+            var error = linear + Math.Abs(residual[j]);
+            var size2 = Math.Abs(value[j]) + Math.Abs(_value[j]);
+            if (!(error <= size2))
+            {
+                difference[j] = (value[j] - _value[j]) + (remainder[j] - _remainder[j]);
+                error = size2;
+            }
+
+            var factor = j < count ? _theta[j] : 1;
+            if (factor == 0)
+                continue;
+            plain += factor * difference[j];
+            plainSize += Math.Abs(factor) * error;
+        }
+
+        return plainSize < size || double.IsNaN(exponent) ? plain : exponent;
+    }
+}

@@ -1,0 +1,157 @@
+using System;
+using FamilyGen.Kernels;
+
+namespace FamilyGen.Partition;
+
+/// <summary>One panel of a sweep at a time: a Gauss rule over an interval or over consecutive lattice points, or the plain
+/// sum over a few of them.</summary>
+internal sealed class PanelSum<TKernel>
+    where TKernel : struct, IKernel
+{
+    // The highest expansion coefficients of a panel's integrands may be this large beside the whole: those of the degrees
+    // that a Gauss rule leaves out are about their square.
+    private const double Tolerance = 1e-10;
+
+    // A fall of the exponent that a rule must not step over before its first node.
+    private const double SteepFall = 10;
+    private const double NegligibleLog = -60;
+
+    private readonly Expansion<TKernel> _expansion;
+    private readonly MomentPlan _plan;
+    private readonly Frame _frame;
+    private readonly long _integer;
+    private readonly double[] _residual;
+    private readonly double[] _difference;
+    private readonly double[] _basis;
+    private readonly double[] _witness;
+
+    public PanelSum(Expansion<TKernel> expansion, MomentPlan plan)
+    {
+        (_expansion, _plan, _frame, _integer) = (expansion, plan, expansion.Frame, expansion.Reference.Integer);
+        _residual = new double[TKernel.Count + 1];
+        _difference = new double[TKernel.Count + 1];
+        _basis = new double[plan.Size];
+        _witness = new double[(plan.Size + 1) * QuadratureRule.WitnessCount];
+        Sums = new Sums(plan);
+    }
+
+    /// <summary>The sums of the last panel, before its measure.</summary>
+    public Sums Sums { get; }
+
+    /// <summary>The logarithm of the integrand at the last node of the last panel.</summary>
+    public double LastLog { get; private set; }
+
+    /// <summary>f − f(m) and the logarithm of the integrand at an offset.</summary>
+    public double Log(double offset, out double exponent)
+    {
+        var x = _frame.At(offset, _integer);
+        exponent = _expansion.Difference(x, _residual, _difference);
+        var log = exponent + _frame.LogJacobian(x);
+        if (!double.IsNaN(log))
+        {
+            FillBasis(x.Displacement);
+            return log;
+        }
+
+        // ∞ − ∞ where a power or the observation itself overflows: beyond every mode
+        if (!(Math.Abs(x.X) < 1e100) || !(Math.Abs(offset) < 300))
+            return double.NegativeInfinity;
+        throw new PartitionException($"The exponent is not a number at {x.X:R}.");
+    }
+
+    /// <summary>The residuals at the offset that was looked at last.</summary>
+    public ReadOnlySpan<double> Residuals => _residual;
+
+    /// <summary>The differences at the offset that was looked at last.</summary>
+    public ReadOnlySpan<double> Differences => _difference;
+
+    /// <summary>Sums over a run of lattice points, from the nearest to the mode outward.</summary>
+    public void SumTerms(double first, double step, int count)
+    {
+        Sums.Clear();
+        for (var i = 0; i < count; i++)
+        {
+            LastLog = Log(first + step * i, out var exponent);
+            var weight = Math.Exp(LastLog);
+            if (weight > 0)
+                Sums.Add(weight, _basis, exponent);
+        }
+    }
+
+    /// <summary>Applies a rule about a center; the half width has the sign of the direction away from the mode.</summary>
+    /// <param name="rule">The rule.</param>
+    /// <param name="center">The offset of the panel's middle.</param>
+    /// <param name="halfWidth">Half its width, signed.</param>
+    /// <param name="measure">The length of the panel, or its number of points.</param>
+    /// <param name="startLog">The logarithm of the integrand where the panel starts.</param>
+    /// <param name="total">The sums before the panel, against which its error is judged.</param>
+    /// <returns>The size of the highest expansion coefficients beside the tolerance: at most 1 where the panel is resolved,
+    /// infinite where the integrand falls before the first node.</returns>
+    public double Apply(QuadratureRule rule, double center, double halfWidth, double measure, double startLog, Sums total)
+    {
+        Sums.Clear();
+        Array.Clear(_witness);
+        for (var i = 0; i < QuadratureRule.NodeCount; i++)
+        {
+            var log = Log(center + halfWidth * rule.Nodes[i], out var exponent);
+            LastLog = log;
+            if (i == 0 && log < startLog - SteepFall && startLog > NegligibleLog)
+                return double.PositiveInfinity;
+            var value = Math.Exp(log);
+            if (value == 0)
+                continue;
+            if (!(value < double.PositiveInfinity))
+                throw new PartitionException($"The integrand rises without bound near {_frame.At(center, _integer).X:R}.");
+            Sums.Add(value * rule.Weights[i], _basis, exponent);
+            AddWitness(value, rule.Witness, i * QuadratureRule.WitnessCount);
+        }
+
+        return Unresolved(measure, total);
+    }
+
+    private void FillBasis(double displacement)
+    {
+        if (_basis.Length == 0)
+            return;
+        _basis[0] = displacement;
+        var tangential = _plan.Tangential;
+        for (var j = 0; j < tangential.Length; j++)
+            _basis[j + 1] = tangential[j] ? _residual[j] : _difference[j];
+    }
+
+    private void AddWitness(double value, double[] table, int row)
+    {
+        Span<double> witness = _witness;
+        for (var q = 0; q < QuadratureRule.WitnessCount; q++)
+            witness[q] += value * table[row + q];
+        var order = _plan.Order;
+        for (var i = 0; i < order.Length; i++)
+        {
+            if (order[i] == 0)
+                continue;
+            var moment = order[i] == 1 ? value * _basis[i] : value * _basis[i] * _basis[i];
+            for (var q = 0; q < QuadratureRule.WitnessCount; q++)
+                witness[(i + 1) * QuadratureRule.WitnessCount + q] += moment * table[row + q];
+        }
+    }
+
+    private double Unresolved(double measure, Sums total)
+    {
+        var worst = Excess(0, measure, total.Weight + measure * Sums.Weight);
+        for (var i = 0; i < _plan.Size; i++)
+        {
+            if (_plan.Order[i] > 0)
+                worst = Math.Max(worst, Excess(i + 1, measure, total.Scale[i] + measure * Sums.Scale[i]));
+        }
+
+        return worst;
+    }
+
+    private double Excess(int function, double measure, double scale)
+    {
+        var largest = 0.0;
+        for (var q = 0; q < QuadratureRule.WitnessCount; q++)
+            largest = Math.Max(largest, Math.Abs(_witness[function * QuadratureRule.WitnessCount + q]));
+        return largest == 0 ? 0 : largest * measure / (Tolerance * scale);
+    }
+}
