@@ -87,7 +87,7 @@ internal sealed partial class Expander
         if (whenTrue.IsNegativeInfinity || whenFalse.IsNegativeInfinity)
         {
             var path = Rendering.Text(whenTrue.IsNegativeInfinity ? condition : Conditions.Not(condition)) + " → −∞";
-            _findings.Add(new Finding("FG0101", origin, EquatableArray.Of(path, string.Join(", ", names))));
+            _findings.Add(new Finding("FG0101", origin, EquatableArray.Of(string.Join(", ", names), path)));
             return whenTrue.IsNegativeInfinity ? whenFalse : whenTrue;
         }
 

@@ -6,7 +6,7 @@ namespace FamilyGen.Generator.Algebra;
 
 /// <summary>From a declaration as it was read to the normal form log p(x | θ) = Σ θⱼTⱼ(x) + log h(x) − A(θ), or to the reasons
 /// why there is none. Never throws, and its work is bounded.</summary>
-/// <remarks>Arguments of the findings: FG0101 (condition and what happens there, parameter names); FG0501 (the factor that
+/// <remarks>Arguments of the findings: FG0101 (parameter names, condition and what happens there); FG0501 (the factor that
 /// ties, its part in x, parameter names, what would mend it); FG0502 (number of parameters, number of statistics, their
 /// names); FG0503 (names of the parameters that cannot be told apart).</remarks>
 internal static class Normalizer

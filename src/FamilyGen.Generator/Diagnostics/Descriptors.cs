@@ -53,18 +53,24 @@ internal static class Descriptors
     public static readonly DiagnosticDescriptor NotSeparable = Error(
         DiagnosticIds.NotSeparable,
         "The kernel does not separate",
-        "{0}");
+        "'{0}' ties {1} and {2} together, so the kernel does not separate into statistics of the observation and functions of the parameters, and this is no exponential family; {3}");
+
+    public static readonly DiagnosticDescriptor Curved = Describe(
+        DiagnosticIds.Curved,
+        "A curved family",
+        "{0} parameters drive {1} statistics ({2}), so this is a curved family; it is fitted by a local method, which may find one of several maxima",
+        DiagnosticSeverity.Info);
 
     public static readonly DiagnosticDescriptor NotIdentified = Error(
         DiagnosticIds.NotIdentified,
         "The trade parameters cannot be told apart",
-        "{0}");
+        "The parameters {0} cannot be told apart: other values of them give the very same law, so no data decide between them; leave one out, or mark it as [Known]");
 
     /// <summary>All of them, in the order of their ids.</summary>
     public static ImmutableArray<DiagnosticDescriptor> All { get; } =
     [
         Shape, NameCollision, NearlyEqualKnown, SupportOnParameter, SupportChanges, SupportEmpty, StatisticOnParameter, Impure,
-        NotSeparable, NotIdentified,
+        NotSeparable, Curved, NotIdentified,
     ];
 
     /// <summary>By id.</summary>

@@ -12,5 +12,6 @@ internal static class DiagnosticIds
     public const string StatisticOnParameter = "FG0201";
     public const string Impure = "FG0202";
     public const string NotSeparable = "FG0501";
+    public const string Curved = "FG0502";
     public const string NotIdentified = "FG0503";
 }

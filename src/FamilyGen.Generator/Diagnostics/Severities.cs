@@ -3,5 +3,5 @@ namespace FamilyGen.Generator.Diagnostics;
 /// <summary>Which findings make a declaration invalid.</summary>
 internal static class Severities
 {
-    public static bool IsError(string id) => id is not DiagnosticIds.NearlyEqualKnown;
+    public static bool IsError(string id) => id is not (DiagnosticIds.NearlyEqualKnown or DiagnosticIds.Curved);
 }

@@ -7,12 +7,12 @@ namespace FamilyGen.Generator.Reading;
 /// <summary>The yes/no functions of the number types that are read as conditions.</summary>
 internal static class NumberTests
 {
-    public static Func<Formula, Expression, Condition>? TryRead(IMethodSymbol method, int arity) =>
+    public static Func<PlacedFormula, Expression, Condition>? TryRead(IMethodSymbol method, int arity) =>
         arity == 1 && method.ContainingType?.SpecialType is SpecialType.System_Double or SpecialType.System_Int32 or SpecialType.System_Int64
             ? Of(method.Name)
             : null;
 
-    private static Func<Formula, Expression, Condition>? Of(string name) => name switch
+    private static Func<PlacedFormula, Expression, Condition>? Of(string name) => name switch
     {
         "IsNaN" => (f, a) => f.Not(f.Equal(a, a)),
         "IsInfinity" => (f, a) => f.Equal(f.Call(Function.Abs, a), f.Constant(double.PositiveInfinity, "∞")),

@@ -88,7 +88,7 @@ internal sealed partial class OperationReader
         return new Always(false);
     }
 
-    private static Condition? Compare(Formula formula, BinaryOperatorKind kind, Expression a, Expression b) => kind switch
+    private static Condition? Compare(PlacedFormula formula, BinaryOperatorKind kind, Expression a, Expression b) => kind switch
     {
         BinaryOperatorKind.LessThan => formula.Less(a, b),
         BinaryOperatorKind.GreaterThan => formula.Less(b, a),

@@ -208,7 +208,7 @@ internal sealed partial class OperationReader
 
         var value = new Opaque(OpaqueText.Of(member), arguments.ToEquatableArray()) { Origin = origin };
         return IsBoolean(type)
-            ? new TruthValue(new Formula(origin).Equal(value, new Formula(origin).Number(1)))
+            ? new TruthValue(new PlacedFormula(origin).Equal(value, new PlacedFormula(origin).Number(1)))
             : new NumberValue(value);
     }
 }

@@ -36,7 +36,7 @@ internal sealed partial class OperationReader
         };
     }
 
-    private Formula FormulaAt(IOperation operation) => new(session.Mark(operation.Syntax));
+    private PlacedFormula FormulaAt(IOperation operation) => new(session.Mark(operation.Syntax));
 
     private static Expression AsNumber(Value value) => value is NumberValue number ? number.Expression : Placeholder(-1);
 
@@ -66,7 +66,7 @@ internal sealed partial class OperationReader
         return Combine(FormulaAt(binary), binary.OperatorKind, left, right, IsIntegral(binary.Type));
     }
 
-    private static Expression Combine(Formula formula, BinaryOperatorKind kind, Expression a, Expression b, bool isIntegral) => kind switch
+    private static Expression Combine(PlacedFormula formula, BinaryOperatorKind kind, Expression a, Expression b, bool isIntegral) => kind switch
     {
         BinaryOperatorKind.Add => formula.Add(a, b),
         BinaryOperatorKind.Subtract => formula.Subtract(a, b),
@@ -136,9 +136,9 @@ internal sealed partial class OperationReader
         switch (whenTrue, whenFalse)
         {
             case (NumberValue a, NumberValue b):
-                return new NumberValue(new Formula(session.Mark(place)).Conditional(condition, a.Expression, b.Expression));
+                return new NumberValue(new PlacedFormula(session.Mark(place)).Conditional(condition, a.Expression, b.Expression));
             case (TruthValue a, TruthValue b):
-                return new TruthValue(new Formula(session.Mark(place)).Choose(condition, a.Condition, b.Condition));
+                return new TruthValue(new PlacedFormula(session.Mark(place)).Choose(condition, a.Condition, b.Condition));
             default:
                 if (whenTrue is RangeValue && whenFalse is RangeValue)
                     session.Refuse(session.Mark(place), ShapeFault.ConditionalRange());

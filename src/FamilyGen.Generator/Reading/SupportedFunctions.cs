@@ -10,11 +10,11 @@ internal static class SupportedFunctions
 {
     private static readonly string[] s_math = ["System.Math", "System.Double", "System.Int32", "System.Int64"];
 
-    private static readonly Dictionary<string, Func<Formula, Expression[], Expression>> s_table = Build();
+    private static readonly Dictionary<string, Func<PlacedFormula, Expression[], Expression>> s_table = Build();
 
     /// <summary>The formula of a known function, or null.</summary>
     public static Expression? TryApply(string type, string name, Expression[] arguments, int origin) =>
-        s_table.TryGetValue(Key(type, name, arguments.Length), out var build) ? build(new Formula(origin), arguments) : null;
+        s_table.TryGetValue(Key(type, name, arguments.Length), out var build) ? build(new PlacedFormula(origin), arguments) : null;
 
     /// <summary>Whether some known function has this plain name, with any number of arguments.</summary>
     public static bool HasName(string name)
@@ -31,17 +31,17 @@ internal static class SupportedFunctions
 
     private static string Key(string type, string name, int arity) => type + "." + name + "/" + arity;
 
-    private static Dictionary<string, Func<Formula, Expression[], Expression>> Build()
+    private static Dictionary<string, Func<PlacedFormula, Expression[], Expression>> Build()
     {
-        var table = new Dictionary<string, Func<Formula, Expression[], Expression>>(StringComparer.Ordinal);
+        var table = new Dictionary<string, Func<PlacedFormula, Expression[], Expression>>(StringComparer.Ordinal);
         AddMath(table);
         AddSpecial(table);
         return table;
     }
 
-    private static void AddMath(Dictionary<string, Func<Formula, Expression[], Expression>> table)
+    private static void AddMath(Dictionary<string, Func<PlacedFormula, Expression[], Expression>> table)
     {
-        void Math(string name, int arity, Func<Formula, Expression[], Expression> build)
+        void Math(string name, int arity, Func<PlacedFormula, Expression[], Expression> build)
         {
             foreach (var type in s_math)
                 table[Key(type, name, arity)] = build;
@@ -84,9 +84,9 @@ internal static class SupportedFunctions
             f.Log(f.Add(f.Number(1), a[0])), f.Log(f.Subtract(f.Number(1), a[0])))));
     }
 
-    private static void AddSpecial(Dictionary<string, Func<Formula, Expression[], Expression>> table)
+    private static void AddSpecial(Dictionary<string, Func<PlacedFormula, Expression[], Expression>> table)
     {
-        void Special(string name, int arity, Func<Formula, Expression[], Expression> build) =>
+        void Special(string name, int arity, Func<PlacedFormula, Expression[], Expression> build) =>
             table[Key("MathNet.Numerics.SpecialFunctions", name, arity)] = build;
 
         Special("GammaLn", 1, (f, a) => f.LogGamma(a[0]));
@@ -106,14 +106,14 @@ internal static class SupportedFunctions
         Special("Hypotenuse", 2, (f, a) => Hypotenuse(f, a[0], a[1]));
     }
 
-    private static Expression Half(Formula f, Expression a) => f.Multiply(f.Number(new Rational(1, 2)), a);
+    private static Expression Half(PlacedFormula f, Expression a) => f.Multiply(f.Number(new Rational(1, 2)), a);
 
-    private static Expression Hypotenuse(Formula f, Expression a, Expression b) =>
+    private static Expression Hypotenuse(PlacedFormula f, Expression a, Expression b) =>
         f.Root(f.Add(f.Power(a, f.Number(2)), f.Power(b, f.Number(2))));
 
-    private static Expression LogBinomial(Formula f, Expression n, Expression k) => f.Add(
+    private static Expression LogBinomial(PlacedFormula f, Expression n, Expression k) => f.Add(
         f.LogFactorial(n), f.Negate(f.LogFactorial(k)), f.Negate(f.LogFactorial(f.Subtract(n, k))));
 
-    private static Expression LogBeta(Formula f, Expression a, Expression b) => f.Add(
+    private static Expression LogBeta(PlacedFormula f, Expression a, Expression b) => f.Add(
         f.LogGamma(a), f.LogGamma(b), f.Negate(f.LogGamma(f.Add(a, b))));
 }

@@ -1,6 +1,7 @@
 using System;
 using System.Collections.Generic;
 using System.Linq;
+using FamilyGen.Generator.Algebra;
 using FamilyGen.Generator.Diagnostics;
 using FamilyGen.Generator.Model;
 
@@ -27,7 +28,7 @@ internal sealed record Judgement(FamilyReading Reading, NormalForm? Form, Equata
         var findings = s_rules.SelectMany(rule => rule(reading)).ToList();
         if (!reading.IsReadable || findings.Any(f => Severities.IsError(f.Id)))
             return new Judgement(reading, null, Causes(findings));
-        var result = FormOf(reading.Declaration);
+        var result = Normalizer.Normalize(reading.Declaration);
         findings.AddRange(result.Findings);
         return new Judgement(reading, findings.Any(f => Severities.IsError(f.Id)) ? null : result.Form, Causes(findings));
     }
@@ -42,7 +43,4 @@ internal sealed record Judgement(FamilyReading Reading, NormalForm? Form, Equata
     }
 
     private static string Stage(Finding finding) => finding.Id.Substring(0, 4);
-
-    private static NormalFormResult FormOf(FamilyDeclaration declaration) =>
-        new(null, EquatableArray<Finding>.Empty);
 }

@@ -4,7 +4,7 @@ using FamilyGen.Generator.Model;
 namespace FamilyGen.Generator.Reading;
 
 /// <summary>Builds formulas all of whose nodes lead back to one place of the source.</summary>
-internal readonly struct Formula(int origin)
+internal readonly struct PlacedFormula(int origin)
 {
     public Expression Number(Rational value) => new Number(value) { Origin = origin };
 
