@@ -28,10 +28,10 @@ internal readonly struct ScaleFree : IArithmetic<ScaleFree>
         : _power == 0 ? _factor
         : _factor * Bounds.Pow(_y, _power);
 
-    /// <summary>The range of values of y times the number.</summary>
-    public Bounds RangeTimesY => _offset != 0 ? (_offset + _factor * _y) * _y
+    /// <summary>The range of values of y times the number; y is given again for a number that is free of it.</summary>
+    public Bounds RangeTimes(Bounds y) => _offset != 0 ? (_offset + _factor * y) * y
         : _power == -1 ? _factor
-        : _factor * Bounds.Pow(_y, _power + 1);
+        : _factor * Bounds.Pow(y, _power + 1);
 
     private bool IsConstant => _power == 0 && _factor.Lower == _factor.Upper;
 
@@ -61,7 +61,7 @@ internal readonly struct ScaleFree : IArithmetic<ScaleFree>
         if (IsZero(b))
             return a;
         // one over y is the form in which the product with y is free of it
-        return new(a.RangeTimesYOf(y) + b.RangeTimesYOf(y), -1, 0, y, hasY);
+        return new(a.RangeTimes(y) + b.RangeTimes(y), -1, 0, y, hasY);
     }
 
     public static ScaleFree operator -(ScaleFree a, ScaleFree b) => a + -b;
@@ -121,8 +121,6 @@ internal readonly struct ScaleFree : IArithmetic<ScaleFree>
 
     private static ScaleFree Scaled(ScaleFree affine, double by, Bounds y) =>
         by == 0 ? (ScaleFree)0 : new(affine._factor.Lower * by, 1, affine._offset * by, y, true);
-
-    private Bounds RangeTimesYOf(Bounds y) => _hasY ? RangeTimesY : _factor * y;
 
     private ScaleFree AsPower() => _offset == 0 ? this : With(Range);
 

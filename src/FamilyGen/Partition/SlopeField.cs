@@ -72,7 +72,7 @@ internal readonly ref struct SlopeField<TKernel>
     }
 
     private Bounds TimesDistance(double end, double direction, Bounds distance) =>
-        _kernel.Derivative<ScaleFree>(_theta, ScaleFree.Affine(end, direction, distance), _representative).RangeTimesY;
+        _kernel.Derivative<ScaleFree>(_theta, ScaleFree.Affine(end, direction, distance), _representative).RangeTimes(distance);
 
     private static Bounds Exp(double from, double to)
     {

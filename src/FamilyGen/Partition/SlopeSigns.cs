@@ -66,13 +66,21 @@ internal static class SlopeSigns
 
             var middle = Middle(coordinate, left, right);
             var size = Math.Max(-slope.Lower, slope.Upper);
-            if (size * (right - left) <= FlatVariation || right - left <= shortest || !(middle > left && middle < right))
+            if (IsBeyondArithmetic(coordinate, left, right, slope) || size * (right - left) <= FlatVariation || right - left <= shortest || !(middle > left && middle < right))
                 continue;
             open.Push((middle, right));
             open.Push((left, middle));
         }
 
         return signs;
+    }
+
+    // Far out powers overflow and leave ∞ − ∞. How the exponent behaves there the set of natural parameters has decided.
+    private static bool IsBeyondArithmetic(Coordinate coordinate, double from, double to, Bounds slope)
+    {
+        var nearest = from > 0 ? from : to < 0 ? -to : 0;
+        return double.IsInfinity(slope.Lower) && double.IsInfinity(slope.Upper)
+            && nearest >= (coordinate == Coordinate.Identity ? 1e60 : 140);
     }
 
     private static void Sample<TKernel>(in SlopeField<TKernel> field, double from, double to, List<SignedRange> signs)
