@@ -146,7 +146,7 @@ internal sealed partial class OperationReader
         }
 
         var origin = session.Mark(call.Syntax);
-        if (SupportedFunctions.TryApply(method.ContainingType.ToDisplayString(), method.Name, arguments, origin) is { } known)
+        if (SupportedFunctions.TryApply(FullName(method.ContainingType), method.Name, arguments, origin) is { } known)
             return new NumberValue(known);
         return OpaqueValue(method, arguments, call, method.ReturnType);
     }
@@ -170,6 +170,9 @@ internal sealed partial class OperationReader
         session.Depend(DependencyKind.Changing, symbol.Name, reason, origin);
         return new NumberValue(Placeholder(origin));
     }
+
+    // System.Double, not double.
+    private static string FullName(INamedTypeSymbol type) => type.ContainingNamespace.ToDisplayString() + "." + type.Name;
 
     private bool IsOwn(ISymbol member) => SymbolEqualityComparer.Default.Equals(member.ContainingType, session.Family);
 

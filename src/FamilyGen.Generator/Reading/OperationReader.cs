@@ -34,7 +34,7 @@ internal sealed partial class OperationReader(ReadingSession session)
     private static bool IsBoolean(ITypeSymbol? type) => type?.SpecialType == SpecialType.System_Boolean;
 
     private static bool IsIntegral(ITypeSymbol? type) =>
-        type?.SpecialType is >= SpecialType.System_SByte and <= SpecialType.System_UInt64 || type?.TypeKind == TypeKind.Enum;
+        type?.SpecialType is >= SpecialType.System_Char and <= SpecialType.System_UInt64 || type?.TypeKind == TypeKind.Enum;
 
     private static bool IsNumeric(ITypeSymbol? type) =>
         IsIntegral(type) || type?.SpecialType is SpecialType.System_Decimal or SpecialType.System_Single or SpecialType.System_Double;

@@ -53,12 +53,32 @@ internal static class DeclaredSource
         return reading.Declaration;
     }
 
-    /// <summary>The findings as "FG0101 at `shape`: message".</summary>
+    /// <summary>The findings as "FG0101 at `shape`", which generator and analyzer must agree on.</summary>
     public static string[] Findings(params string[] sources)
     {
-        var (reading, locations) = Read(sources);
-        return Judgement.Of(reading).Findings.Select(f => f.Id + " at `" + Text(locations[f.Origin]) + "`").ToArray();
+        var compilation = Compile(sources);
+        var (reading, locations) = Read(compilation);
+        var findings = Places(Judgement.Of(reading), locations);
+
+        // The analyzer sees what is generated.
+        CSharpGeneratorDriver.Create([new FamilyGenerator().AsSourceGenerator()], parseOptions: Parse)
+            .RunGeneratorsAndUpdateCompilation(compilation, out var generated, out var problems);
+        Assert.Empty(problems);
+        var (again, placesAgain) = Read(generated);
+        Assert.Equal(findings, Places(Judgement.Of(again), placesAgain));
+        return findings;
     }
+
+    /// <summary>The errors and warnings that the compiler itself reports once code is generated.</summary>
+    public static string[] CompilerMessages(params string[] sources)
+    {
+        CSharpGeneratorDriver.Create([new FamilyGenerator().AsSourceGenerator()], parseOptions: Parse)
+            .RunGeneratorsAndUpdateCompilation(Compile(sources), out var generated, out _);
+        return generated.GetDiagnostics().Where(d => d.Severity >= DiagnosticSeverity.Warning).Select(d => d.ToString()).ToArray();
+    }
+
+    private static string[] Places(Judgement judgement, ImmutableArray<Location> locations) =>
+        judgement.Findings.Select(f => f.Id + " at `" + Text(locations[f.Origin]) + "`").ToArray();
 
     /// <summary>The formula that a body of the given text is read as, with an observation x of the type.</summary>
     public static string Formula(string body, string type = "double", string members = "")
