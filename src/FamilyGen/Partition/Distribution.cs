@@ -49,6 +49,9 @@ public sealed partial class Distribution<TKernel>
     /// <summary>A(θ) = log ∫ exp(Σ θⱼTⱼ + log h).</summary>
     public double LogNormalizer { get; }
 
+    /// <summary>log ∫ exp(f − f(m)), with m the mode about which <see cref="Moments()"/> are taken.</summary>
+    internal double LogWeight => _whole.LogWeight;
+
     /// <summary>Whether the modes of the exponent are proved to be all there are. It is not so where a function could not
     /// be read.</summary>
     public bool IsProven => _whole.IsProven;

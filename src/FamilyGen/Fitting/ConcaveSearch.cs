@@ -1,0 +1,240 @@
+using System;
+using System.Collections.Generic;
+using System.Linq;
+using FamilyGen.Kernels;
+
+namespace FamilyGen.Fitting;
+
+/// <summary>How a search for the maximum of a concave likelihood ended.</summary>
+/// <param name="Maximum">The maximum; null when there is none.</param>
+/// <param name="Face">The face of the parameter set on which it lies.</param>
+/// <param name="Multipliers">For each wall of the face, the rise of the likelihood of a unit of weight beyond it.</param>
+/// <param name="Path">The parameters that the search went through.</param>
+/// <param name="Iterations">The steps taken, those on tried faces included.</param>
+/// <param name="Reason">Why an evaluation failed, if one did.</param>
+internal sealed record SearchOutcome<TKernel>(
+    ModelPoint<TKernel>? Maximum,
+    Face Face,
+    double[] Multipliers,
+    IReadOnlyList<double[]> Path,
+    int Iterations,
+    string? Reason)
+    where TKernel : struct, IKernel;
+
+/// <summary>Newton's method for the likelihood in the natural parameters, where it is concave, so that the one maximum is
+/// found from anywhere or shown to be missing.</summary>
+/// <remarks>A step is kept inside the walls of the parameter set and shortened until the slope along it has not turned
+/// further than it may; differences of the likelihood itself, which rounding drowns near the maximum, are asked only where
+/// they are large. A wall that stops a full step and whose points belong to the set is tried as a face: its maximum is the
+/// answer when the likelihood would rise beyond the wall (the Karush–Kuhn–Tucker conditions, sufficient by concavity); if
+/// not, the maximum is elsewhere and that wall is never tried again.</remarks>
+internal sealed class ConcaveSearch<TKernel>(StatisticSums<TKernel> sums)
+    where TKernel : struct, IKernel
+{
+    private const int MaximalSteps = 200;
+    private const int StepsThatProveDivergence = 40;
+    private const double Converged = 1e-14;
+
+    // Below this decrement the law is quadratic to within rounding if it is near a maximum at all.
+    private const double Quadratic = 1e-5;
+
+    private readonly double[] _unit = StartingPoints<TKernel>.Units(sums);
+    private int _iterations;
+
+    /// <summary>Searches the whole parameter set.</summary>
+    public SearchOutcome<TKernel> Run()
+    {
+        var face = Face.Whole(sums.Kernel.NaturalSet, TKernel.Count);
+        var start = StartingPoints<TKernel>.Best(sums, face, _unit, out var reason);
+        return start is null ? new(null, face, [], [], 0, reason) : Climb(start, face);
+    }
+
+    private SearchOutcome<TKernel> Climb(ModelPoint<TKernel> point, Face face)
+    {
+        var path = new List<double[]> { point.Theta };
+        var tried = new HashSet<Wall>();
+        string? reason = null;
+        var previous = (Point: point, Decrement: double.PositiveInfinity);
+        var isSteady = false;
+        var unsteady = 0;
+        for (var steps = 0; steps < MaximalSteps && unsteady < StepsThatProveDivergence; steps++)
+        {
+            if (NewtonStep.TryFrom(point, face) is not { } step)
+                break;
+            if (isSteady && step.Decrement < Quadratic && (step.Decrement <= Converged || step.Decrement > previous.Decrement / 4))
+            {
+                var best = step.Decrement <= previous.Decrement ? point : previous.Point;
+                return new(best, face, Multipliers(best, face), path, _iterations, null);
+            }
+
+            var (room, wall) = Room(face, point.Theta, step.Change);
+            if (room < 1 && wall is not null && face.CanHold(wall) && tried.Add(wall)
+                && OnFace(face.With(wall), point, step, room) is { Maximum: not null } held)
+            {
+                return held;
+            }
+
+            var (next, length) = LineSearch(point, step, room, out reason);
+            if (next is null)
+                break;
+            var ratio = next.CurvatureAlong(step.Change) / point.CurvatureAlong(step.Change);
+            isSteady = ratio is > 0.7 and < 1.4 && length == 1;
+            unsteady = isSteady || length < 1 ? 0 : unsteady + 1;
+            previous = (point, step.Decrement);
+            point = next;
+            path.Add(point.Theta);
+            _iterations++;
+        }
+
+        return new(null, face, [], path, _iterations, reason);
+    }
+
+    /// <summary>The maximum on a face, if it is the maximum of the whole set.</summary>
+    private SearchOutcome<TKernel>? OnFace(Face face, ModelPoint<TKernel> from, NewtonStep step, double room)
+    {
+        if (face.Limits is null)
+            return null;
+        var theta = from.Basis.Step(from.Theta, Scaled(step.Centred, room));
+        face.Restore(theta);
+        if (face.Dimension == 0)
+        {
+            if (ModelPoint<TKernel>.TryAt(sums, theta, out _) is not { } corner || Multipliers(corner, face) is not { } rise || rise.Any(IsInward))
+                return null;
+            return new(corner, face, rise, [theta], _iterations, null);
+        }
+
+        var start = sums.Kernel.NaturalSet.Contains(theta) && ModelPoint<TKernel>.TryAt(sums, theta, out _) is { } point
+            && NewtonStep.TryFrom(point, face) is not null
+            ? point
+            : StartingPoints<TKernel>.Best(sums, face, _unit, out _);
+        if (start is null)
+            return null;
+        var outcome = Climb(start, face);
+        return outcome.Maximum is null || outcome.Multipliers.Any(IsInward) ? null : outcome;
+    }
+
+    /// <summary>A rise towards the inside, beyond what rounding can feign.</summary>
+    private static bool IsInward(double multiplier) => !(multiplier >= 0);
+
+    /// <summary>The solution of gradient = Σ multiplier·weights over the walls of the face, rounding removed.</summary>
+    private static double[] Multipliers(ModelPoint<TKernel> point, Face face)
+    {
+        if (face.Held.Count == 0)
+            return [];
+        var gradient = point.NaturalGradient();
+        var walls = face.Held.Count;
+        var products = new double[walls, walls];
+        var sides = new double[walls];
+        for (var a = 0; a < walls; a++)
+        {
+            for (var j = 0; j < gradient.Length; j++)
+            {
+                var weight = face.Held[a].Weights[j];
+                if (weight == 0)
+                    continue;
+                sides[a] += weight * gradient[j];
+                for (var b = 0; b < walls; b++)
+                    products[a, b] += weight * face.Held[b].Weights[j];
+            }
+        }
+
+        // An infinite mean on the face is one that grows without bound towards the inside: the likelihood rises there.
+        if (!Array.TrueForAll(sides, double.IsFinite) || Cholesky.TryFactor(products) is not { } factor)
+            return [double.NegativeInfinity];
+        var multipliers = factor.Solve(sides);
+        for (var a = 0; a < walls; a++)
+        {
+            var noise = 0.0;
+            for (var j = 0; j < gradient.Length; j++)
+            {
+                var deviation = Math.Sqrt(Math.Abs(point.CurvatureAlong(Unit(j, gradient.Length))));
+                if (face.Held[a].Weights[j] != 0 && double.IsFinite(deviation))
+                    noise += 1e-10 * deviation / Math.Abs(face.Held[a].Weights[j]);
+            }
+
+            if (Math.Abs(multipliers[a]) <= noise)
+                multipliers[a] = 0;
+        }
+
+        return multipliers;
+    }
+
+    private static double[] Unit(int index, int count)
+    {
+        var unit = new double[count];
+        unit[index] = 1;
+        return unit;
+    }
+
+    /// <summary>The multiple of a change at which the first wall is met, and that wall.</summary>
+    private static (double Room, Wall? Wall) Room(Face face, double[] theta, double[] change)
+    {
+        var (room, first) = (double.PositiveInfinity, (Wall?)null);
+        foreach (var wall in face.Limits!)
+        {
+            double rate = 0;
+            for (var j = 0; j < change.Length; j++)
+                rate += wall.Weights[j] * change[j];
+            var distance = -wall.Value(theta);
+            if (rate > 0 && distance / rate < room)
+                (room, first) = (distance / rate, wall);
+        }
+
+        return (room, first);
+    }
+
+    /// <summary>A point along the step at which the likelihood is higher.</summary>
+    private (ModelPoint<TKernel>? Point, double Length) LineSearch(ModelPoint<TKernel> from, NewtonStep step, double room, out string? reason)
+    {
+        const double Longest = 1024;
+        reason = null;
+        var rise = step.Decrement * step.Decrement;
+        var limit = Math.Min(Longest, 0.9 * room);
+        var length = Math.Min(1, limit);
+        var (low, lowRise, high, highRise) = (0.0, rise, double.PositiveInfinity, double.NaN);
+        ModelPoint<TKernel>? best = null;
+        var bestLength = 0.0;
+        for (var trial = 0; trial < 60; trial++)
+        {
+            var next = ModelPoint<TKernel>.TryAt(sums, from.Basis.Step(from.Theta, Scaled(step.Centred, length)), out var failure);
+            if (next is null)
+            {
+                reason = failure;
+                if (best is not null)
+                    break;
+                (high, highRise) = (length, double.NaN);
+                length = low + (0.25 * (length - low));
+                continue;
+            }
+
+            var slope = next.SlopeAlong(step.Change);
+            var isTiny = step.Decrement < Quadratic;
+            var isLower = next.Objective < from.Objective - (1e-9 * (1 + Math.Abs(from.Objective)));
+            if ((slope < -0.5 * rise || isLower) && !isTiny)
+            {
+                if (best is not null)
+                    break;
+                (high, highRise) = (length, slope);
+                var secant = double.IsFinite(slope) && slope < 0 ? lowRise / (lowRise - slope) : 0.5;
+                length = low + (Math.Clamp(secant, 0.1, 0.9) * (high - low));
+                continue;
+            }
+
+            (best, bestLength) = (next, length);
+            (low, lowRise) = (length, slope);
+            if (!(slope > 0.5 * rise) || isTiny || length >= limit || double.IsFinite(high))
+                break;
+            length = Math.Min(2 * length, limit);
+        }
+
+        return (best, bestLength);
+    }
+
+    private static double[] Scaled(double[] change, double factor)
+    {
+        var result = new double[change.Length];
+        for (var j = 0; j < result.Length; j++)
+            result[j] = factor * change[j];
+        return result;
+    }
+}
