@@ -26,9 +26,10 @@ internal sealed class QuadratureRule
 
     private QuadratureRule(Func<int, double> recurrence)
     {
-        Span<double> root = stackalloc double[NodeCount + 1];
+        var root = new double[NodeCount + 1];
         for (var k = 1; k <= NodeCount; k++)
             root[k] = Math.Sqrt(recurrence(k));
+        Recurrence = root;
         Nodes = Roots(root);
         Weights = new double[NodeCount];
         Witness = new double[NodeCount * WitnessCount];
@@ -44,6 +45,9 @@ internal sealed class QuadratureRule
                 Witness[i * WitnessCount + q] = polynomial[NodeCount - 1 - q] / sum;
         }
     }
+
+    /// <summary>r₀ … r₂₀ of the orthonormal polynomials' recurrence xφₙ = rₙ₊₁φₙ₊₁ + rₙφₙ₋₁.</summary>
+    public double[] Recurrence { get; }
 
     /// <summary>The nodes in ascending order.</summary>
     public double[] Nodes { get; }
@@ -81,6 +85,9 @@ internal sealed class QuadratureRule
         Volatile.Write(ref s_lattice[power], rule);
         return rule;
     }
+
+    /// <summary>φ₀(x), φ₁(x), …, orthonormal under the rule.</summary>
+    public void Orthonormal(double x, Span<double> polynomial) => Orthonormal(Recurrence, x, polynomial);
 
     private static void Orthonormal(ReadOnlySpan<double> root, double x, Span<double> polynomial)
     {
