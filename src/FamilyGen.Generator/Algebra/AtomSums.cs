@@ -36,6 +36,13 @@ internal static class AtomSums
         return new WeightedAtom(Clean(Polynomial.Of(coefficient)), atom.WithoutOrigins());
     }
 
+    /// <summary>The sum as one formula.</summary>
+    public static Expression ToExpression(this AtomSum sum)
+    {
+        var terms = sum.Terms.Select(t => t.Coefficient.IsOne() ? t.Atom : Formula.Product(t.Coefficient, t.Atom)).ToArray();
+        return terms.Length == 1 ? terms[0] : Formula.Sum(terms);
+    }
+
     private static Expression Clean(Polynomial coefficient) => coefficient.ToSortedExpression().WithoutOrigins();
 
     // −∞ on one set inside another is −∞ on their intersection.

@@ -92,12 +92,18 @@ internal static class Derivative
             Function.Cos => Formula.Negate(Formula.Call(Function.Sin, argument)),
             Function.Abs => Formula.Call(Function.Sign, argument),
             Function.LogGamma => Formula.Call(Function.Digamma, argument),
-            Function.Floor or Function.Sign or Function.IntegerQuotient => Formula.Zero,
+            Function.Floor or Function.Sign => Formula.Zero,
+
+            // On integers both are continued along one residue class: x mod n stays, x / n is (x − x mod n)/n.
+            Function.Remainder when IsInteger(call) => Formula.Zero,
+            Function.IntegerQuotient => Formula.Power(call.Arguments[1], -1),
             Function.Remainder when !Dependences.Symbols(call.Arguments[1]).Any(which) => Formula.One,
             _ => null,
         };
         return outer is null ? null : outer.IsZero() ? Formula.Zero : Multiply(outer, slope);
     }
+
+    private static bool IsInteger(Call call) => call.Arguments.SelectMany(Dependences.Symbols).All(s => s.IsInteger);
 
     private static Expression Add(System.Collections.Generic.IEnumerable<Expression> terms)
     {

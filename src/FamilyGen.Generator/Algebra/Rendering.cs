@@ -16,8 +16,7 @@ internal static class Rendering
 
     public static string Text(Expression expression) => Write(expression, InSum);
 
-    public static string Text(AtomSum sum) => Text(Formula.Sum(sum.Terms.Select(t =>
-        t.Coefficient.IsOne() ? t.Atom : Formula.Product(t.Coefficient, t.Atom)).ToArray()));
+    public static string Text(AtomSum sum) => Text(sum.ToExpression());
 
     public static string Text(Condition condition) => condition switch
     {

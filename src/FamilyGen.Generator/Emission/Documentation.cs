@@ -37,7 +37,7 @@ internal sealed class Documentation(FamilyDeclaration declaration, NormalForm fo
         writer.Line($"/// <para>log p({declaration.ObservationName}) = {Exponent} − A.</para>");
         if (declaration.IsTrade)
         {
-            var natural = form.Statistics.Select(s => $"{s.Parameter} = {Encoded(FormulaText.Of(s.Natural!))}");
+            var natural = form.Statistics.Select(s => $"{s.Parameter} = {Encoded(Rendering.Text(s.Natural!))}");
             writer.Line($"/// <para>{string.Join(", ", natural)}.</para>");
         }
 
@@ -45,7 +45,7 @@ internal sealed class Documentation(FamilyDeclaration declaration, NormalForm fo
         writer.Line("/// </remarks>");
     }
 
-    private static string Text(AtomSum sum) => FormulaText.Of(sum);
+    private static string Text(AtomSum sum) => Rendering.Text(sum);
 
     private static string Grouped(string text) => text.Contains(" ") || text.StartsWith("−") || text.StartsWith("-") ? $"({text})" : text;
 

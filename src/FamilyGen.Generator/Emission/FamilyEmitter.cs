@@ -22,8 +22,7 @@ internal static class FamilyEmitter
         fit.Write();
         new KernelEmitter(declaration, form, writer).Write();
         CloseFile(declaration, writer);
-        if (declaration.Known.Count > 0)
-            fit.WriteAt(form);
+        fit.WriteAt(form);
         return writer.ToString();
     }
 
@@ -40,8 +39,7 @@ internal static class FamilyEmitter
         var fit = new FitEmitter(declaration, writer, members);
         fit.Write();
         CloseFile(declaration, writer);
-        if (declaration.Known.Count > 0)
-            fit.WriteAt(form);
+        fit.WriteAt(form);
         return writer.ToString();
     }
 

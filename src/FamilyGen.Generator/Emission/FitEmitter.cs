@@ -67,9 +67,12 @@ internal sealed class FitEmitter
         _writer.Line();
     }
 
-    /// <summary>The extension that gives the model for one set of known values; it stands beside the declared class.</summary>
+    /// <summary>The extension that gives the model for one set of known values; it stands beside the declared class, so
+    /// there is none where an enclosing class hides that.</summary>
     public void WriteAt(NormalForm form)
     {
+        if (_declaration.Known.Count == 0 || _declaration.Accessibility == "private")
+            return;
         var path = string.Join(".", _declaration.Outer.Select(o => Names.Identifier(o.Name)).Concat([_name]));
         var host = string.Concat(_declaration.Outer.Select(o => o.Name)) + _declaration.Name + "Fits";
         var source = _declaration.IsTrade ? "Parameters" : "Natural";

@@ -24,9 +24,13 @@ internal sealed class GenericPrinter(string observation, Func<Symbol, string> sy
             Function.Exp or Function.Log or Function.Sin or Function.Cos or Function.Abs or Function.LogGamma or Function.Digamma =>
                 $"TNumber.{call.Function}({Arg(0)})",
 
-            // min and max through |a − b|, whose derivative at equality is their mean.
+            // Minimum and maximum through |a − b|, whose derivative at equality is their mean.
             Function.Min => $"((({Arg(0)}) + ({Arg(1)}) - TNumber.Abs({Arg(0)} - ({Arg(1)}))) / 2)",
             Function.Max => $"((({Arg(0)}) + ({Arg(1)}) + TNumber.Abs({Arg(0)} - ({Arg(1)}))) / 2)",
+
+            // Constant on a piece and along a residue class, so the piece's point decides.
+            Function.Sign or Function.Remainder => $"(TNumber)({conditions.Print(call)})",
+            Function.IntegerQuotient => $"(({Arg(0)} - {Print(new Call(Function.Remainder, call.Arguments))}) / {Factor(call.Arguments[1])})",
             _ => "TNumber.Unknown",
         };
     }

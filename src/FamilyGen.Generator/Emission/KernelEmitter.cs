@@ -119,10 +119,10 @@ internal sealed class KernelEmitter(FamilyDeclaration declaration, NormalForm fo
         var terms = new List<string>();
         for (var i = 0; i < _functions.Count; i++)
         {
-            var derivative = Derivative.Of(_functions[i]);
+            var derivative = Derivative.Of(_functions[i].ToExpression());
             if (derivative is Number { Value.IsZero: true })
                 continue;
-            var body = _text.Generic.Factor(derivative);
+            var body = derivative is null ? "TNumber.Unknown" : _text.Generic.Factor(derivative);
             terms.Add(i == form.Statistics.Count ? body
                 : derivative is Number { Value: var v } && v == Rational.One ? $"theta[{i}]"
                 : $"theta[{i}] * {body}");

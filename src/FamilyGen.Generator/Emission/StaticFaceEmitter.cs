@@ -74,12 +74,7 @@ internal sealed class StaticFaceEmitter
 
     private string Declared(DeclaredMember member) => FamilyEmitter.Call(member, _declaration, _x, Names.Identifier);
 
-    private string Expanded(AtomSum sum) => sum.Terms.Count == 0
-        ? "0"
-        : _plain.Print(sum.Terms.Count == 1 ? Weighted(sum.Terms[0]) : new Sum(sum.Terms.Select(Weighted).ToEquatableArray()));
-
-    private static Expression Weighted(WeightedAtom term) =>
-        term.Coefficient is Number { Value: var v } && v == Rational.One ? term.Atom : new Product(EquatableArray.Of(term.Coefficient, term.Atom));
+    private string Expanded(AtomSum sum) => sum.Terms.Count == 0 ? "0" : _plain.Print(sum.ToExpression());
 
     private void Method(string type, string name, string parameters, string summary, string body) =>
         _members.Expression(name, $"public static {type} {name}({_signature.WithKnown(parameters)})", body, $"<summary>{summary}</summary>");

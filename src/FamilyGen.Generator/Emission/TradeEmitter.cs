@@ -35,7 +35,7 @@ internal sealed class TradeEmitter(FamilyDeclaration declaration, NormalForm for
         var naturals = form.Statistics.Select(s => s.Natural!).ToList();
         for (var i = 0; i < declaration.Parameters.Count; i++)
         {
-            if (naturals.Any(n => Mentions.Symbol(n, declaration.Parameters[i].Name)))
+            if (naturals.Any(n => Mentions(n, declaration.Parameters[i].Name)))
                 writer.Line($"var {names[declaration.Parameters[i].Name]} = parameters[{i}];");
         }
 
@@ -60,7 +60,7 @@ internal sealed class TradeEmitter(FamilyDeclaration declaration, NormalForm for
             var names = Locals(form.Statistics.Select(s => s.Parameter));
             for (var j = 0; j < form.Statistics.Count; j++)
             {
-                if (form.Inverse.Any(e => Mentions.Symbol(e, form.Statistics[j].Parameter)))
+                if (form.Inverse.Any(e => Mentions(e, form.Statistics[j].Parameter)))
                     writer.Line($"var {names[form.Statistics[j].Parameter]} = theta[{j}];");
             }
 
@@ -83,6 +83,8 @@ internal sealed class TradeEmitter(FamilyDeclaration declaration, NormalForm for
             writer.Line($"(lower[{i}], upper[{i}]) = ({FormulaPrinter.Literal(form.ParameterLower[i])}, {FormulaPrinter.Literal(form.ParameterUpper[i])});");
         writer.Close();
     }
+
+    private static bool Mentions(Expression formula, string name) => Dependences.Symbols(formula).Any(s => s.Name == name);
 
     private static Dictionary<string, string> Locals(IEnumerable<string> names)
     {

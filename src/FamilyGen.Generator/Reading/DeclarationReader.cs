@@ -25,7 +25,7 @@ internal sealed class DeclarationReader(ReadingSession session, DeclaredMembers 
         return new FamilyDeclaration(
             family.ContainingNamespace.IsGlobalNamespace ? "" : family.ContainingNamespace.ToDisplayString(),
             Outer(family),
-            SyntaxFactsOf.Accessibility(family.DeclaredAccessibility),
+            SyntaxFactsOf.Accessibility(family),
             family.Name,
             _signatures.Observation,
             _signatures.ObservationName,

@@ -6,15 +6,26 @@ namespace FamilyGen.Generator.Reading;
 /// <summary>How a type is spelled when a further part of it is written.</summary>
 internal static class SyntaxFactsOf
 {
-    public static string Accessibility(Accessibility accessibility) => accessibility switch
+    /// <summary>From where a type can be named: "public", "internal", or "private" where an enclosing type hides it.</summary>
+    public static string Accessibility(INamedTypeSymbol type)
     {
-        Microsoft.CodeAnalysis.Accessibility.Public => "public",
-        Microsoft.CodeAnalysis.Accessibility.Private => "private",
-        Microsoft.CodeAnalysis.Accessibility.Protected => "protected",
-        Microsoft.CodeAnalysis.Accessibility.ProtectedOrInternal => "protected internal",
-        Microsoft.CodeAnalysis.Accessibility.ProtectedAndInternal => "private protected",
-        _ => "internal",
-    };
+        var widest = "public";
+        for (var current = type; current is not null; current = current.ContainingType)
+        {
+            switch (current.DeclaredAccessibility)
+            {
+                case Microsoft.CodeAnalysis.Accessibility.Public:
+                    break;
+                case Microsoft.CodeAnalysis.Accessibility.Internal or Microsoft.CodeAnalysis.Accessibility.ProtectedOrInternal:
+                    widest = "internal";
+                    break;
+                default:
+                    return "private";
+            }
+        }
+
+        return widest;
+    }
 
     public static string Keyword(INamedTypeSymbol type) => type switch
     {
