@@ -7,7 +7,7 @@ namespace FamilyGen.Partition;
 /// <remarks>f(x) − f(m) = s·d + Σ θⱼrⱼ + r_h with d = x − m, the residuals r of the kernel and the tangent
 /// s = Σ θⱼ slopeⱼ + slope_h, which nearly vanishes at a mode and is therefore summed in compensated arithmetic. Far from m
 /// the two parts may cancel; the plain difference of values is then the better one and is taken.</remarks>
-internal sealed class Expansion<TKernel>
+internal sealed partial class Expansion<TKernel>
     where TKernel : struct, IKernel
 {
     // Parts beyond this size, in units of the exponent, make the plain difference worth a look.
