@@ -112,7 +112,8 @@ internal sealed partial class Expander
     // to one: only their difference tells the branches apart.
     private static Polynomial Pieces(Condition condition, Conditional conditional, Polynomial whenTrue, Polynomial whenFalse)
     {
-        var common = whenTrue.Where(t => whenFalse.Terms.Any(u => Term.CompareFactors(t, u) == 0 && t.Coefficient == u.Coefficient));
+        var (allTrue, allFalse) = (whenTrue, whenFalse);
+        var common = whenTrue.Where(t => whenFalse.Terms.Any(u => Term.CompareFactors(t, u) == 0 && t.Coefficient == u.Coefficient) && !HasCompany(t));
         whenTrue -= common;
         whenFalse -= common;
         var constantTrue = whenTrue.Where(t => !t.Dependence.HasObservation());
@@ -127,6 +128,10 @@ internal sealed partial class Expander
         var here = Indicator(condition, conditional.Origin).Terms[0];
         var there = Indicator(Conditions.Not(condition), conditional.Origin).Terms[0];
         return (whenTrue * here) + (whenFalse * there) + common;
+
+        // The −log x of (shape − 1)·log x stays with shape, so that the coefficient is the one that was written.
+        bool HasCompany(Term term) => allTrue.Terms.Concat(allFalse.Terms).Any(t =>
+            Term.CompareFactors(t, term) != 0 && Term.CompareFactors(t.Keep(f => f.Dependence.HasObservation()), term.Keep(f => f.Dependence.HasObservation())) == 0);
     }
 
     private static Polynomial Indicator(Condition condition, int origin) =>

@@ -38,7 +38,7 @@ internal static class Normalizer
     {
         var observation = expander.Scope.Observation;
         var statistics = declaration.Statistics
-            .Select(s => new Statistic(s.Name, s.Parameter, AtomSums.Of(expander.Expand(s.Body), observation, withConstant: true), null))
+            .Select(s => new Statistic(s.Name, s.Parameter, AtomSums.Of(Expanded(s.Body, expander), observation, withConstant: true), null))
             .ToList();
         var logBase = AtomSums.Of(LogBase(declaration, expander), observation, withConstant: true);
         return Form(declaration, expander, statistics, logBase, EquatableArray<Expression>.Empty, null, new List<Finding>());
@@ -47,13 +47,15 @@ internal static class Normalizer
     private static Polynomial LogBase(FamilyDeclaration declaration, Expander expander) => declaration.BaseMeasure switch
     {
         null => Polynomial.Zero,
-        { IsLogarithm: true, Body: var body } => expander.Expand(body),
-        { Body: var body } => expander.Expand(Formula.Log(body)),
+        { IsLogarithm: true, Body: var body } => Expanded(body, expander),
+        { Body: var body } => Expanded(Formula.Log(body), expander),
     };
+
+    private static Polynomial Expanded(Expression body, Expander expander) => RecurrenceOfGamma.Apply(expander.Expand(body), expander);
 
     private static NormalFormResult Trade(FamilyDeclaration declaration, Expander expander)
     {
-        var kernel = Separation.Separated(expander.Expand(declaration.Kernel!));
+        var kernel = Separation.Separated(Expanded(declaration.Kernel!, expander));
         var findings = expander.Findings.Concat(Separation.Findings(kernel, declaration.ObservationName, expander.IsExhausted)).ToList();
         if (findings.Count > 0)
             return Refused(findings.ToArray());
@@ -79,6 +81,8 @@ internal static class Normalizer
         }
 
         var ranges = ParameterRanges.Of(kernel, expander.Scope, parameters);
+        foreach (var name in parameters)
+            expander.Scope.Narrow(name, ranges.Lower(name), ranges.Upper(name));
         var logBase = AtomSums.Of(form.LogBase, expander.Scope.Observation, withConstant: false);
         return Form(declaration, expander, statistics, logBase, EquatableArray<Expression>.Empty, ranges, findings);
     }
@@ -92,23 +96,29 @@ internal static class Normalizer
         ParameterRanges? ranges,
         List<Finding> findings)
     {
+        var shape = new SupportShape(declaration, expander, statistics, logBase);
         var form = new NormalForm(
             statistics.ToEquatableArray(),
             logBase,
-            EquatableArray<Expression>.Empty,
-            Formula.One,
-            false,
-            false,
-            false,
-            EquatableArray<EndRow>.Empty,
-            "",
+            shape.Breakpoints.Points.ToEquatableArray(),
+            shape.Breakpoints.Period,
+            shape.Breakpoints.IsOpaque,
+            shape.LowerSingular,
+            shape.UpperSingular,
+            shape.Ends,
+            shape.NaturalSetText,
             inverse,
             declaration.Parameters.Select(p => ranges!.Lower(p.Name)).ToEquatableArray(),
             declaration.Parameters.Select(p => ranges!.Upper(p.Name)).ToEquatableArray());
         return new NormalFormResult(form, findings.ToEquatableArray());
     }
 
-    private static NormalFormResult Refused(params Finding[] findings) => new(null, findings.ToEquatableArray());
+    // The lowest id explains the cause; what follows from it is left out.
+    private static NormalFormResult Refused(params Finding[] findings)
+    {
+        var lowest = findings.Min(f => f.Id);
+        return new(null, findings.Where(f => f.Id == lowest).ToEquatableArray());
+    }
 
     private static string Count(int value) => value.ToString(System.Globalization.CultureInfo.InvariantCulture);
 

@@ -107,7 +107,7 @@ internal sealed class Polynomial
     public List<Term> Sorted()
     {
         var sorted = Terms.Where(t => !t.IsNumber).ToList();
-        sorted.Sort(Term.CompareFactors);
+        sorted.Sort(Term.CompareInSum);
         sorted.AddRange(Terms.Where(t => t.IsNumber));
         return sorted;
     }

@@ -41,6 +41,9 @@ internal sealed class Scope
         return range;
     }
 
+    /// <summary>Takes on what the use of a parameter says about its range.</summary>
+    public void Narrow(string parameter, double lower, double upper) => _parameters[parameter] = new Range(lower, true, upper, true);
+
     public bool IsPositive(Expression expression) => RangeOf(expression).IsPositive;
 
     public bool IsNegative(Expression expression) => RangeOf(expression).IsNegative;

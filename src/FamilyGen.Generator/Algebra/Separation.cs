@@ -68,6 +68,14 @@ internal static class Separation
         return parts.Count == 0 ? observation : string.Join(", ", parts.Distinct().Take(3));
     }
 
+    private static Expression WithoutNumbers(Expression expression)
+    {
+        if (expression is not Product product)
+            return expression;
+        var factors = product.Factors.Where(f => Dependences.Of(f).HasObservation()).ToArray();
+        return factors.Length == 1 ? factors[0] : Formula.Product(factors);
+    }
+
     private static void Collect(Expression expression, List<string> parts)
     {
         var dependence = Dependences.Of(expression);
@@ -75,7 +83,7 @@ internal static class Separation
             return;
         if (!dependence.HasParameter())
         {
-            parts.Add(Rendering.Text(expression));
+            parts.Add(Rendering.Text(WithoutNumbers(expression)));
             return;
         }
 
@@ -83,7 +91,7 @@ internal static class Separation
         {
             var free = product.Factors.Where(f => Dependences.Of(f) is var d && d.HasObservation() && !d.HasParameter()).ToArray();
             if (free.Length > 0)
-                parts.Add(Rendering.Text(free.Length == 1 ? free[0] : Formula.Product(free)));
+                parts.Add(Rendering.Text(WithoutNumbers(Formula.Product(free))));
             foreach (var tied in product.Factors.Where(f => Dependences.Of(f).Ties()))
                 Collect(tied, parts);
             return;

@@ -39,7 +39,7 @@ internal sealed class StatisticNames(IEnumerable<string> taken)
             case Call { Function: Function.LogGamma, Arguments: var a } when a[0] is Sum { Terms: var t } && t.Count == 2 && t[1].IsOne():
                 return new[] { "log", "factorial" }.Concat(Words(t[0]));
             case Call call:
-                return Prefix(call.Function).Concat(Words(call.Arguments[0]));
+                return Prefix(call.Function).Concat(Words(call.Arguments.FirstOrDefault(a => Dependences.Of(a).HasObservation()) ?? call.Arguments[0]));
             case Opaque opaque:
                 return new[] { Small(opaque.Text.Substring(opaque.Text.LastIndexOf('.') + 1)) };
             case Conditional conditional when conditional.IsIndicator():
@@ -57,6 +57,10 @@ internal sealed class StatisticNames(IEnumerable<string> taken)
 
     private static IEnumerable<string> Words(Condition condition) => condition switch
     {
+        And { Left: Comparison { Right: Symbol { Kind: SymbolKind.Observation } x } above, Right: Comparison below } =>
+            Words(x).Concat(new[] { "from" }).Concat(Value(above.Left)).Concat(Words(below).Skip(1)),
+        And { Left: Comparison { Left: Symbol { Kind: SymbolKind.Observation } }, Right: Comparison { Right: Symbol { Kind: SymbolKind.Observation } } } and =>
+            Words(new And(and.Right, and.Left)),
         And and => Words(and.Left).Concat(Words(and.Right).Skip(1)),
         Comparison { Left: Symbol { Kind: SymbolKind.Observation } x, Relation: Relation.Equal } equal => Words(x).Concat(new[] { "is" }).Concat(Value(equal.Right)),
         Comparison { Left: Symbol { Kind: SymbolKind.Observation } x } below => Words(x).Concat(new[] { "below" }).Concat(Value(below.Right)),

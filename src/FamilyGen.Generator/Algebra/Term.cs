@@ -159,6 +159,17 @@ internal sealed class Term
         return b.Factors.Count.CompareTo(a.Factors.Count);
     }
 
+    /// <summary>The order in which terms are written: higher powers of x first, then what is free of x.</summary>
+    public static int CompareInSum(Term a, Term b)
+    {
+        if (a.Dependence.HasObservation() != b.Dependence.HasObservation())
+            return a.Dependence.HasObservation() ? -1 : 1;
+        var byObservation = a.Dependence.HasObservation()
+            ? CompareFactors(a.Keep(f => f.Dependence.HasObservation()), b.Keep(f => f.Dependence.HasObservation()))
+            : 0;
+        return byObservation != 0 ? byObservation : CompareFactors(a, b);
+    }
+
     private static Factor Join(Factor a, Factor b)
     {
         var origin = b.Exponent.Dependence > a.Exponent.Dependence ? b.Origin : a.Origin;
