@@ -39,23 +39,28 @@ public sealed class FamilyGenerator : IIncrementalGenerator
             .Select(static (judgement, _) => GeneratedFile.Of(judgement))
             .WithTrackingName(Steps.Emit);
 
-        context.RegisterSourceOutput(sources, static (output, file) =>
+        context.RegisterSourceOutput(sources, static (output, files) =>
         {
-            if (file is not null)
+            foreach (var file in files)
                 output.AddSource(file.HintName, SourceText.From(file.Text, Encoding.UTF8));
         });
     }
 
     private sealed record GeneratedFile(string HintName, string Text)
     {
-        /// <summary>The family's code, stubs where the declaration is refused, nothing where it cannot be added to.</summary>
-        public static GeneratedFile? Of(Judgement judgement)
+        /// <summary>The family's face and kernel, stubs where the declaration is refused, nothing where the class cannot be
+        /// added to.</summary>
+        public static EquatableArray<GeneratedFile> Of(Judgement judgement)
         {
             if (!judgement.Reading.CanBeCompleted)
-                return null;
+                return EquatableArray<GeneratedFile>.Empty;
             var declaration = judgement.Reading.Declaration;
-            var text = judgement.Form is { } form ? FamilyEmitter.Emit(declaration, form) : FamilyEmitter.EmitStub(declaration);
-            return new GeneratedFile(declaration.MetadataName + ".g.cs", text);
+            var name = declaration.MetadataName;
+            return judgement.Form is { } form
+                ? EquatableArray.Of(
+                    new GeneratedFile(name + ".g.cs", FamilyEmitter.EmitFace(declaration, form)),
+                    new GeneratedFile(name + ".Kernel.g.cs", FamilyEmitter.EmitKernel(declaration, form)))
+                : EquatableArray.Of(new GeneratedFile(name + ".g.cs", FamilyEmitter.EmitStub(declaration)));
         }
     }
 }

@@ -7,15 +7,15 @@ namespace FamilyGen.Generator.Emission;
 /// <summary>What the generated documentation says of the family, in the modeller's names.</summary>
 internal sealed class Documentation(FamilyDeclaration declaration, NormalForm form)
 {
-    /// <summary>The exponent without its normalizer: "logHours·log(hours) + …".</summary>
+    /// <summary>The exponent without its normalizer, in the parameters that the modeller named: (shape − 1)·log(hours) − ….</summary>
     public string Exponent
     {
         get
         {
-            var terms = form.Statistics.Select(s => $"{s.Parameter}·{Grouped(Text(s.Body))}").ToList();
-            if (form.LogBase.Terms.Count > 0)
-                terms.Add(Text(form.LogBase));
-            return Encoded(string.Join(" + ", terms)).Replace("+ -", "− ").Replace("+ −", "− ");
+            var terms = form.Statistics
+                .Select(s => Formula.Product(s.Natural ?? new Symbol(s.Parameter, SymbolKind.Natural, false), s.Body.ToExpression()))
+                .Concat(form.LogBase.Terms.Count > 0 ? [form.LogBase.ToExpression()] : []);
+            return Encoded(Rendering.Text(Formula.Sum(terms.ToArray())));
         }
     }
 
@@ -46,8 +46,6 @@ internal sealed class Documentation(FamilyDeclaration declaration, NormalForm fo
     }
 
     private static string Text(AtomSum sum) => Rendering.Text(sum);
-
-    private static string Grouped(string text) => text.Contains(" ") || text.StartsWith("−") || text.StartsWith("-") ? $"({text})" : text;
 
     private static string Encoded(string text) => text.Replace("&", "&amp;").Replace("<", "&lt;").Replace(">", "&gt;");
 }

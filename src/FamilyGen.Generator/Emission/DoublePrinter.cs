@@ -51,11 +51,13 @@ internal sealed class DoublePrinter(string real, string? integer, Func<Symbol, s
     {
         Always a => a.Value ? "true" : "false",
         Not n => $"!({Print(n.Operand)})",
-        And a => $"({Print(a.Left)} && {Print(a.Right)})",
-        Or o => $"({Print(o.Left)} || {Print(o.Right)})",
-        Comparison c => $"({Side(c, c.Left)} {Sign(c.Relation)} {Side(c, c.Right)})",
+        And a => $"{Conjunct(a.Left)} && {Conjunct(a.Right)}",
+        Or o => $"{Print(o.Left)} || {Print(o.Right)}",
+        Comparison c => $"{Side(c, c.Left)} {Sign(c.Relation)} {Side(c, c.Right)}",
         _ => throw new InvalidOperationException("unknown condition " + condition.GetType().Name),
     };
+
+    private string Conjunct(Condition condition) => condition is Or ? $"({Print(condition)})" : Print(condition);
 
     private static string Sign(Relation relation) => relation switch
     {

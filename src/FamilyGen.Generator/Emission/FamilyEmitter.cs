@@ -4,25 +4,31 @@ using FamilyGen.Generator.Model;
 
 namespace FamilyGen.Generator.Emission;
 
-/// <summary>The generated half of a declared class: face, fit and kernel.</summary>
+/// <summary>The generated half of a declared class: its face and its kernel, a file each.</summary>
 internal static class FamilyEmitter
 {
     /// <summary>The attribute that every generated member carries.</summary>
     public const string Generated = "[global::System.CodeDom.Compiler.GeneratedCode(\"FamilyGen\", \"0.1.0\")]";
 
-    public static string Emit(FamilyDeclaration declaration, NormalForm form)
+    /// <summary>The face: the members that a user of the family calls.</summary>
+    public static string EmitFace(FamilyDeclaration declaration, NormalForm form)
     {
         var writer = new SourceWriter();
         OpenFile(declaration, writer);
         new Documentation(declaration, form).WriteRemarks(writer);
         writer.Open($"partial class {Names.Identifier(declaration.Name)}");
-        var members = new MemberWriter(writer, null, []);
-        new FaceEmitter(declaration, form, members).Write();
-        var fit = new FitEmitter(declaration, writer, members);
-        fit.Write();
+        WriteFace(declaration, form, writer, new MemberWriter(writer, null, []));
+        return writer.ToString();
+    }
+
+    /// <summary>The kernel: all that is particular to the family, on one screen.</summary>
+    public static string EmitKernel(FamilyDeclaration declaration, NormalForm form)
+    {
+        var writer = new SourceWriter();
+        OpenFile(declaration, writer);
+        writer.Open($"partial class {Names.Identifier(declaration.Name)}");
         new KernelEmitter(declaration, form, writer).Write();
         CloseFile(declaration, writer);
-        fit.WriteAt(form);
         return writer.ToString();
     }
 
@@ -34,13 +40,17 @@ internal static class FamilyEmitter
         OpenFile(declaration, writer);
         writer.Open($"partial class {Names.Identifier(declaration.Name)}");
         var members = new MemberWriter(writer, $"{declaration.Name} is not a valid family: see the build's messages.", declaration.MemberNames);
-        var form = StubForm.Of(declaration);
+        WriteFace(declaration, StubForm.Of(declaration), writer, members);
+        return writer.ToString();
+    }
+
+    private static void WriteFace(FamilyDeclaration declaration, NormalForm form, SourceWriter writer, MemberWriter members)
+    {
         new FaceEmitter(declaration, form, members).Write();
         var fit = new FitEmitter(declaration, writer, members);
         fit.Write();
         CloseFile(declaration, writer);
         fit.WriteAt(form);
-        return writer.ToString();
     }
 
     private static void OpenFile(FamilyDeclaration declaration, SourceWriter writer)

@@ -1,4 +1,5 @@
 using System;
+using System.Collections.Generic;
 using System.Globalization;
 using System.Linq;
 using System.Numerics;
@@ -85,7 +86,7 @@ internal abstract class FormulaPrinter
     private string SumText(Sum sum)
     {
         var text = "";
-        foreach (var term in sum.Terms)
+        foreach (var term in Terms(sum))
         {
             var (negative, magnitude) = Sign(term);
             if (text.Length == 0)
@@ -99,6 +100,7 @@ internal abstract class FormulaPrinter
 
     private (string, int) ProductOf(Product product)
     {
+        product = Folded(product);
         var (negative, magnitude) = Sign(product);
         if (negative)
             return ("-" + Write(magnitude, Unary), Unary);
@@ -115,11 +117,37 @@ internal abstract class FormulaPrinter
         return ((numerator.Length == 0 ? "1" : numerator) + denominator, Multiplicative);
     }
 
+    /// <summary>One flat product whose numbers are multiplied into its first factor: π·x/12 has one number, not two.</summary>
+    private static Product Folded(Product product)
+    {
+        var factors = Flat(product).ToList();
+        var rational = factors.OfType<Number>().Aggregate(Rational.One, (all, n) => all * n.Value);
+        var constants = factors.OfType<Constant>().ToList();
+        var others = factors.Where(f => f is not (Number or Constant)).ToList();
+        if (constants.Count > 0)
+        {
+            var value = constants.Aggregate(1.0, (all, c) => all * c.Value);
+            others.Insert(0, new Constant(value * (double)rational.Numerator / (double)rational.Denominator, ""));
+        }
+        else if (rational != Rational.One || others.Count == 0)
+        {
+            others.Insert(0, new Number(rational));
+        }
+
+        return new Product(new(others));
+    }
+
+    private static IEnumerable<Expression> Flat(Expression e) => e is Product p ? p.Factors.SelectMany(Flat) : [e];
+
+    private static IEnumerable<Expression> Terms(Expression e) => e is Sum s ? s.Terms.SelectMany(Terms) : [e is Product p ? Folded(p) : e];
+
     /// <summary>Takes a leading minus off a term.</summary>
     private static (bool Negative, Expression Magnitude) Sign(Expression term) => term switch
     {
         Number { Value.Sign: < 0 } n => (true, new Number(-n.Value)),
         Constant { Value: < 0 } c => (true, new Constant(-c.Value, c.Text)),
+        Product p when p.Factors.Count > 1 && p.Factors[0] is Constant { Value: < 0 } c =>
+            (true, new Product(new(new Expression[] { new Constant(-c.Value, c.Text) }.Concat(p.Factors.Skip(1))))),
         Product p when p.Factors.Count > 0 && p.Factors[0] is Number { Value.Sign: < 0 } n =>
             (true, n.Value == -Rational.One && p.Factors.Count > 1
                 ? p.Factors.Count == 2 ? p.Factors[1] : new Product(new(p.Factors.Skip(1)))

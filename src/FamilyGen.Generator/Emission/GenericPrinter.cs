@@ -11,10 +11,8 @@ namespace FamilyGen.Generator.Emission;
 internal sealed class GenericPrinter(string observation, Func<Symbol, string> symbol, DoublePrinter conditions) : FormulaPrinter
 {
     protected override string SymbolText(Symbol s) => s.Kind == SymbolKind.Observation ? observation
-        : s.Kind == SymbolKind.Known ? "(TNumber)(double)" + symbol(s)
+        : s.Kind == SymbolKind.Known && s.IsInteger ? "(double)" + symbol(s)
         : symbol(s);
-
-    protected override string NumberText(double value) => "(TNumber)(" + Literal(value) + ")";
 
     protected override string CallText(Call call)
     {
@@ -29,7 +27,7 @@ internal sealed class GenericPrinter(string observation, Func<Symbol, string> sy
             Function.Max => $"((({Arg(0)}) + ({Arg(1)}) + TNumber.Abs({Arg(0)} - ({Arg(1)}))) / 2)",
 
             // Constant on a piece and along a residue class, so the piece's point decides.
-            Function.Sign or Function.Remainder => $"(TNumber)({conditions.Print(call)})",
+            Function.Sign or Function.Remainder => $"({conditions.Print(call)})",
             Function.IntegerQuotient => $"(({Arg(0)} - {Print(new Call(Function.Remainder, call.Arguments))}) / {Factor(call.Arguments[1])})",
             _ => "TNumber.Unknown",
         };
@@ -46,7 +44,7 @@ internal sealed class GenericPrinter(string observation, Func<Symbol, string> sy
     };
 
     protected override string ConditionalText(Conditional c) =>
-        $"{Print(c.Condition)} ? ({Print(c.WhenTrue)}) : ({Print(c.WhenFalse)})";
+        $"{Print(c.Condition)} ? {Print(c.WhenTrue)} : {Print(c.WhenFalse)}";
 
     public override string Print(Condition condition) => conditions.Print(condition);
 

@@ -116,22 +116,23 @@ internal sealed class KernelEmitter(FamilyDeclaration declaration, NormalForm fo
 
     private void WriteDerivative()
     {
-        var terms = new List<string>();
-        for (var i = 0; i < _functions.Count; i++)
-        {
-            var derivative = Derivative.Of(_functions[i].ToExpression());
-            if (derivative is Number { Value.IsZero: true })
-                continue;
-            var body = derivative is null ? "TNumber.Unknown" : _text.Generic.Factor(derivative);
-            terms.Add(i == form.Statistics.Count ? body
-                : derivative is Number { Value: var v } && v == Rational.One ? $"theta[{i}]"
-                : $"theta[{i}] * {body}");
-        }
-
         writer.Line(Inherit);
         writer.Line($"public TNumber Derivative<TNumber>(global::System.ReadOnlySpan<double> theta, TNumber x, in {Kernels}Point piece)");
         writer.Indented($"where TNumber : struct, {Kernels}IArithmetic<TNumber> =>");
-        writer.Indented((terms.Count == 0 ? "0" : string.Join(" + ", terms)) + ";");
+        var terms = new List<Expression>();
+        for (var i = 0; i < _functions.Count; i++)
+        {
+            if (Derivative.Of(_functions[i].ToExpression()) is not { } slope)
+            {
+                writer.Indented("TNumber.Unknown;");
+                return;
+            }
+
+            if (!slope.IsZero())
+                terms.Add(i == form.Statistics.Count ? slope : Formula.Product(new Symbol($"theta[{i}]", SymbolKind.Natural, false), slope));
+        }
+
+        writer.Indented(_text.Generic.Print(new Sum(terms.ToEquatableArray())) + ";");
     }
 
     /// <summary>Σ coefficient · part(atom); parts that are null vanish.</summary>

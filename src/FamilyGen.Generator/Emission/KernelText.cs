@@ -28,7 +28,7 @@ internal sealed class KernelText
 
     /// <summary>Known values are fields of the kernel.</summary>
     public static string KernelSymbol(Symbol symbol) =>
-        symbol.Kind == SymbolKind.Known ? Names.Pascal(symbol.Name) : Names.Identifier(symbol.Name);
+        symbol.Kind == SymbolKind.Known ? Names.Pascal(symbol.Name) : symbol.Name;
 
     /// <summary>log((x − end)/(m − end)) where the form vanishes at a finite end of an interval, so that it stays exact
     /// there; null elsewhere.</summary>

@@ -27,6 +27,9 @@ internal sealed class SourceWriter
 
     public void Close(string tail = "")
     {
+        // No blank line before a closing brace.
+        while (_text.Length > 1 && _text[_text.Length - 1] == '\n' && _text[_text.Length - 2] == '\n')
+            _text.Length--;
         _depth--;
         Line("}" + tail);
     }
