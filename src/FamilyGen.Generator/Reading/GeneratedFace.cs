@@ -30,6 +30,9 @@ internal static class GeneratedFace
         ("Variance", "double Variance => 0;"),
         ("Entropy", "double Entropy => 0;"),
         ("Sample", "double Sample(global::System.Random random) => 0;"),
+        ("LogBase", "double LogBase(double x) => 0;"),
+        ("InSupport", "bool InSupport(double x) => true;"),
+        ("IsNatural", "bool IsNatural(double[] natural) => true;"),
     ];
 
     /// <summary>The declarations of those members that a class, as the reader sees it, does not have yet.</summary>

@@ -1,8 +1,10 @@
+using System.Linq;
 using System.Runtime.CompilerServices;
 using FamilyGen.Generator.Algebra;
 using FamilyGen.Generator.Diagnostics;
 using FamilyGen.Generator.Model;
 using Microsoft.CodeAnalysis;
+using Microsoft.CodeAnalysis.Operations;
 
 namespace FamilyGen.Generator.Reading;
 
@@ -57,6 +59,8 @@ internal sealed partial class OperationReader(ReadingSession session)
     /// <summary>An operation that is on no list: either it asks something that changes, or it is unsupported.</summary>
     private Expression Refuse(IOperation operation, string? sentence = null)
     {
+        if (operation.DescendantsAndSelf().Any(IsBroken))
+            return Broken().Expression;
         if (ChangingSources.FindIn(operation) is { } source)
         {
             var place = session.Mark(source.Operation.Syntax);
@@ -64,10 +68,16 @@ internal sealed partial class OperationReader(ReadingSession session)
             return Placeholder(place);
         }
 
+        if (operation.DescendantsAndSelf().OfType<IMemberReferenceOperation>().FirstOrDefault(IsGeneratedParameter) is { } parameter)
+            return Generated(parameter, parameter.Member).Expression;
         var origin = session.Mark(operation.Syntax);
         session.Refuse(origin, sentence ?? UnsupportedOperations.Sentence(operation));
         return Placeholder(origin);
     }
+
+    // Natural[0] is no number on the list, but it tells what the member depends on.
+    private bool IsGeneratedParameter(IMemberReferenceOperation reference) =>
+        IsOwn(reference.Member) && GeneratedFace.IsGenerated(reference.Member);
 
     private static string Describe(ISymbol symbol) => symbol switch
     {
