@@ -1,5 +1,6 @@
 using System.Collections.Generic;
 using System.Linq;
+using FamilyGen.Generator.Model;
 
 namespace FamilyGen.Generator.Emission;
 
@@ -48,10 +49,10 @@ internal sealed class MemberWriter(SourceWriter writer, string? refusal, IEnumer
         writer.Line();
     }
 
-    /// <summary>A property that the constructor sets.</summary>
+    /// <summary>A property that the constructor sets; a name that the face takes already is refused, and only a stub meets it.</summary>
     public void AutoProperty(string name, string type, string documentation)
     {
-        if (!Begin(name, [documentation]))
+        if (GeneratedNames.IsReserved(name) || !Begin(name, [documentation]))
             return;
         writer.Line($"public {type} {name} {(IsStub ? $"=> {Throw};" : "{ get; }")}");
         writer.Line();
