@@ -47,8 +47,10 @@ internal sealed class BasinSweep<TKernel>
         }
         else
         {
-            SweepInterval(-lower, -1);
-            SweepInterval(upper, 1);
+            // the reference point lies in the basin unless slopes overflow there
+            var origin = Math.Clamp(0, lower, upper);
+            SweepInterval(origin, origin - lower, -1);
+            SweepInterval(origin, upper - origin, 1);
         }
     }
 
@@ -56,13 +58,15 @@ internal sealed class BasinSweep<TKernel>
     /// on a lattice.</summary>
     public Sums Total { get; }
 
-    /// <summary>An offset at which the integrand has fallen by about one, from a first guess; at most the given end.</summary>
-    public static double FoldDistance(PanelSum<TKernel> panel, double guess, double end, double direction)
+    /// <summary>A distance from an offset at which the integrand has fallen by about one, from a first guess; at most the
+    /// given end.</summary>
+    public static double FoldDistance(PanelSum<TKernel> panel, double origin, double guess, double end, double direction)
     {
         var distance = Math.Min(guess, end);
+        var top = origin == 0 ? 0 : panel.Log(origin, out _);
         for (var i = 0; i < 60; i++)
         {
-            var fall = -panel.Log(direction * distance, out _);
+            var fall = top - panel.Log(origin + direction * distance, out _);
             if (fall is > 0.25 and < 4)
                 break;
             if (fall <= 0.25 && distance >= end)
@@ -78,13 +82,13 @@ internal sealed class BasinSweep<TKernel>
         return distance;
     }
 
-    private void SweepInterval(double end, double direction)
+    private void SweepInterval(double origin, double end, double direction)
     {
         if (!(end > 0))
             return;
         var start = 0.0;
-        var startLog = 0.0;
-        var width = 2 * FoldDistance(_panel, Math.Min(1, end / 2), end, direction);
+        var startLog = origin == 0 ? 0 : _panel.Log(origin, out _);
+        var width = 2 * FoldDistance(_panel, origin, Math.Min(1, end / 2), end, direction);
         double before = double.PositiveInfinity;
         var stalls = 0;
         while (start < end)
@@ -93,7 +97,7 @@ internal sealed class BasinSweep<TKernel>
             var size = Math.Min(width, end - start);
             if (start + size == start)
                 break;
-            var excess = _panel.Apply(QuadratureRule.Interval, direction * (start + size / 2), direction * size / 2, size, startLog, Total);
+            var excess = _panel.Apply(QuadratureRule.Interval, origin + direction * (start + size / 2), direction * size / 2, size, startLog, Total);
             if (excess > 1)
             {
                 stalls = excess > 0.75 * before && !double.IsInfinity(excess) ? stalls + 1 : 0;
@@ -107,7 +111,7 @@ internal sealed class BasinSweep<TKernel>
 
             var share = Share(size);
             Total.Add(_panel.Sums, size);
-            _sink?.AddInterval(direction > 0 ? start : -(start + size), size, _panel.Sums.Weight * size);
+            _sink?.AddInterval(origin + (direction > 0 ? start : -(start + size)), size, _panel.Sums.Weight * size);
             start += size;
             startLog = _panel.LastLog;
             width = size * Growth(excess, 4);
@@ -126,7 +130,7 @@ internal sealed class BasinSweep<TKernel>
         var startLog = 0.0;
         double width = end <= QuadratureRule.ShortestRun || _termByTerm
             ? 1
-            : 2 * Math.Ceiling(FoldDistance(_panel, Math.Min(Math.Abs(step), end * Math.Abs(step)), end * Math.Abs(step), Math.Sign(step)) / Math.Abs(step));
+            : 2 * Math.Ceiling(FoldDistance(_panel, 0, Math.Min(Math.Abs(step), end * Math.Abs(step)), end * Math.Abs(step), Math.Sign(step)) / Math.Abs(step));
         double terms = 0;
         var quiet = 0;
         while (next <= end)

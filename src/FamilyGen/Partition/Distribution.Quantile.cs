@@ -4,7 +4,8 @@ namespace FamilyGen.Partition;
 
 public sealed partial class Distribution<TKernel>
 {
-    // Rounding that a distribution function at a lattice point may carry, beside its own value and beside 1.
+    // Rounding that a distribution function at a lattice point may carry beside its own value, and what is lost when a
+    // probability is taken from 1.
     private const double LatticeSlack = 64 * 2.2204460492503131e-16;
     private const double OneSlack = 1.2e-16;
 
@@ -15,7 +16,7 @@ public sealed partial class Distribution<TKernel>
     {
         if (!(p >= 0 && p <= 1))
             throw new ArgumentOutOfRangeException(nameof(p), p, "A probability lies between 0 and 1.");
-        return p <= 0.5 ? Solve(p, isUpper: false) : Solve(1 - p, isUpper: true);
+        return p <= 0.5 ? Solve(p, isUpper: false, slack: 0) : Solve(1 - p, isUpper: true, OneSlack);
     }
 
     /// <summary>The point above which the probability q lies: the quantile of 1 − q, for q too small to be seen beside 1.
@@ -25,15 +26,15 @@ public sealed partial class Distribution<TKernel>
     {
         if (!(q >= 0 && q <= 1))
             throw new ArgumentOutOfRangeException(nameof(q), q, "A probability lies between 0 and 1.");
-        return q < 0.5 ? Solve(q, isUpper: true) : Solve(1 - q, isUpper: false);
+        return q < 0.5 ? Solve(q, isUpper: true, slack: 0) : Solve(1 - q, isUpper: false, OneSlack);
     }
 
-    private double Solve(double probability, bool isUpper)
+    private double Solve(double probability, bool isUpper, double slack)
     {
         if (probability == 0)
             return isUpper ? _domain.Upper : _domain.IsLattice ? FirstPoint() : _domain.Lower;
         if (_domain.IsLattice)
-            return SolveLattice(probability, isUpper);
+            return SolveLattice(probability, isUpper, slack);
         return probability >= ThinTail
             ? SolvePanel(probability, isUpper)
             : SolveTail(Math.Log(probability), isUpper);
@@ -124,71 +125,73 @@ public sealed partial class Distribution<TKernel>
     private static double Observation(BasinPart<TKernel> part, double offset) =>
         Math.Clamp(part.Expansion.Frame.At(offset).X, part.Basin.Lower, part.Basin.Upper);
 
-    // In a thin tail the logarithm of the tail itself is solved for, in the integration coordinate.
+    // In a thin tail the logarithm of the tail itself is solved for, in the logarithm of the distance where the tail ends at
+    // a finite point.
     private double SolveTail(double logProbability, bool isUpper)
     {
-        var chart = new Chart(_domain);
+        const double LeastLog = -744.5;
         var start = SolvePanel(2 * ThinTail, isUpper);
+        var end = isUpper ? _domain.Upper : _domain.Lower;
+        var other = isUpper ? _domain.Lower : _domain.Upper;
         var direction = isUpper ? 1.0 : -1.0;
-        var (least, greatest) = chart.SearchRange;
-        var inner = chart.CoordinateOf(start);
-        var outer = isUpper ? greatest : least;
-        if (!double.IsFinite(inner))
+
+        // x = origin + sign·exp(t) about a finite end, or the far one; x = t on the line
+        var isLinear = double.IsInfinity(end) && double.IsInfinity(other);
+        var origin = double.IsFinite(end) ? end : other;
+        var sign = origin == _domain.Lower ? 1.0 : -1.0;
+        double ObservationAt(double t) => isLinear ? t : origin + sign * Math.Exp(t);
+        var inner = isLinear ? start : Math.Log(Math.Abs(start - origin));
+        var outer = isLinear ? direction * double.MaxValue : double.IsFinite(end) ? LeastLog : 709.5;
+        var outward = isLinear ? direction : double.IsFinite(end) ? -1.0 : 1.0;
+        if (LogTail(start, isUpper) - logProbability <= 0 || !double.IsFinite(inner))
             return start;
-        var u = inner;
-        var excess = LogTail(start, isUpper) - logProbability;
-        if (excess <= 0)
-            return start;
-        for (var step = 0; step < 200; step++)
+        if (!isLinear && double.IsFinite(end) && LogTail(ObservationAt(outer), isUpper) > logProbability)
+            return end;
+        var t = inner;
+        for (var step = 0; step < 300; step++)
         {
-            var x = chart.ReferenceNear(u).X;
-            var log = LogDensity(x) + LogJacobian(chart, u);
-            // d log tail/du, from which the next point is taken; tails are mostly log-concave, so that it does not overshoot
-            var slope = Math.Exp(log - (excess + logProbability));
-            var next = u + direction * excess / slope;
-            if (!double.IsFinite(next) || !((next - inner) * direction > 0 && (outer - next) * direction > 0))
-                next = Between(chart.Kind, inner, outer);
-            if (next == u || !((next - inner) * direction > 0))
-                return x;
-            var at = chart.ReferenceNear(next).X;
-            excess = LogTail(at, isUpper) - logProbability;
-            if (excess >= 0)
-                inner = next;
-            else
-                outer = next;
+            var x = ObservationAt(t);
+            var log = LogTail(x, isUpper);
+            var excess = log - logProbability;
             if (Math.Abs(excess) <= 1e-13 * Math.Abs(logProbability))
-                return at;
-            u = next;
+                return x;
+            if (excess > 0)
+                inner = t;
+            else
+                outer = t;
+
+            // d log tail/dt: tails are mostly log-concave, so that the step does not overshoot
+            var slope = Math.Exp(LogDensity(x) + (isLinear ? 0 : t) - log);
+            var next = t + outward * excess / slope;
+            if (!double.IsFinite(next) || !((next - inner) * outward > 0 && (outer - next) * outward > 0))
+                next = Between(isLinear, inner, outer);
+            if (next == t || !((next - inner) * outward > 0 && (outer - next) * outward > 0))
+                return x;
+            t = next;
         }
 
-        return chart.ReferenceNear(u).X;
+        return ObservationAt(t);
     }
 
     private double LogTail(double x, bool isUpper) => isUpper ? LogSurvival(x) : LogCdf(x);
 
-    private static double LogJacobian(Chart chart, double u)
+    private static double Between(bool isLinear, double a, double b)
     {
-        var frame = new Frame(chart, chart.ReferenceNear(u));
-        return frame.LogJacobianAtReference;
-    }
-
-    private static double Between(Coordinate coordinate, double a, double b)
-    {
-        if (coordinate == Coordinate.Identity && a != 0 && Math.Sign(a) == Math.Sign(b) && Math.Abs(Math.ILogB(a) - Math.ILogB(b)) > 2)
+        if (isLinear && a != 0 && Math.Sign(a) == Math.Sign(b) && Math.Abs(Math.ILogB(a) - Math.ILogB(b)) > 2)
             return Math.Sign(a) * Math.Sqrt(Math.Abs(a)) * Math.Sqrt(Math.Abs(b));
         return a / 2 + b / 2;
     }
 
     // The smallest point whose lower tail reaches the probability, or whose upper tail no longer exceeds it.
-    private double SolveLattice(double probability, bool isUpper)
+    private double SolveLattice(double probability, bool isUpper, double slack)
     {
-        var (low, high) = LatticeBracket(probability, isUpper);
+        var (low, high) = LatticeBracket(probability, isUpper, slack);
         while (high - low > 1)
         {
             var middle = low + Math.Floor((high - low) / 2);
             if (!(middle > low && middle < high))
                 break;
-            if (Reaches(middle, probability, isUpper))
+            if (Reaches(middle, probability, isUpper, slack))
                 high = middle;
             else
                 low = middle;
@@ -197,19 +200,19 @@ public sealed partial class Distribution<TKernel>
         return high;
     }
 
-    private bool Reaches(double x, double probability, bool isUpper) => isUpper
-        ? Survival(x) <= probability * (1 + LatticeSlack) + OneSlack
-        : Cdf(x) >= probability * (1 - LatticeSlack);
+    private bool Reaches(double x, double probability, bool isUpper, double slack) => isUpper
+        ? Survival(x) <= probability * (1 + LatticeSlack) + slack
+        : Cdf(x) >= probability * (1 - LatticeSlack) - slack;
 
     // A point that does not reach the probability and one that does, found by strides from the panel that holds it.
-    private (double Low, double High) LatticeBracket(double probability, bool isUpper)
+    private (double Low, double High) LatticeBracket(double probability, bool isUpper, double slack)
     {
         var start = Math.Round(_whole.Main!.Basin.Mode.X);
         if (Tables.IsOrdered && probability >= ThinTail)
             start = PanelStart(probability, isUpper);
         var (low, high) = (start, start);
         var stride = 1.0;
-        if (Reaches(start, probability, isUpper))
+        if (Reaches(start, probability, isUpper, slack))
         {
             do
             {
@@ -217,7 +220,7 @@ public sealed partial class Distribution<TKernel>
                 low = Math.Max(high - stride, _domain.Lower - 1);
                 stride *= 2;
             }
-            while (low >= _domain.Lower && Reaches(low, probability, isUpper));
+            while (low >= _domain.Lower && Reaches(low, probability, isUpper, slack));
         }
         else
         {
@@ -227,7 +230,7 @@ public sealed partial class Distribution<TKernel>
                 high = Math.Min(low + stride, _domain.Upper);
                 stride *= 2;
             }
-            while (high < _domain.Upper && !Reaches(high, probability, isUpper));
+            while (high < _domain.Upper && !Reaches(high, probability, isUpper, slack));
         }
 
         return (low, high);

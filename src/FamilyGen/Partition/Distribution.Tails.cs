@@ -8,6 +8,9 @@ public sealed partial class Distribution<TKernel>
     // Below this probability a tail is integrated for itself, about its own mode.
     private const double ThinTail = 1e-5;
 
+    // Above this one the other tail is taken from 1, so that both always agree.
+    private const double ThickTail = 0.9;
+
     private WeightTables<TKernel>? _tables;
 
     /// <summary>The panels over the whole support with their weights.</summary>
@@ -28,8 +31,9 @@ public sealed partial class Distribution<TKernel>
         < 0 => 0,
         > 0 => 1,
         _ => double.IsNaN(x) ? double.NaN
-            : Tables.UpTo(x) is var body && body >= ThinTail ? body
-            : Math.Exp(LogProbability(SubRange.UpTo(x))),
+            : Tables.UpTo(x) is var body && body < ThinTail ? Math.Exp(LogProbability(SubRange.UpTo(x)))
+            : body > ThickTail ? 1 - Upper(x)
+            : body,
     };
 
     /// <summary>P(X &gt; x), to 1e−9 of itself however small it is.</summary>
@@ -38,8 +42,9 @@ public sealed partial class Distribution<TKernel>
         < 0 => 1,
         > 0 => 0,
         _ => double.IsNaN(x) ? double.NaN
-            : Tables.Above(x) is var body && body >= ThinTail ? body
-            : Math.Exp(LogProbability(SubRange.Above(x))),
+            : Tables.Above(x) is var body && body < ThinTail ? Math.Exp(LogProbability(SubRange.Above(x)))
+            : body > ThickTail ? 1 - Lower(x)
+            : body,
     };
 
     /// <summary>log P(X ≤ x), finite where the probability itself is below the least double.</summary>
@@ -94,6 +99,12 @@ public sealed partial class Distribution<TKernel>
             ? double.NegativeInfinity
             : Math.Min(0, CompensatedSum.Difference(partition.LogValue, _whole.LogValue));
     }
+
+    private double Upper(double x) =>
+        Tables.Above(x) is var body && body < ThinTail ? Math.Exp(LogProbability(SubRange.Above(x))) : body;
+
+    private double Lower(double x) =>
+        Tables.UpTo(x) is var body && body < ThinTail ? Math.Exp(LogProbability(SubRange.UpTo(x))) : body;
 
     private static double FromNearerSide(double probability, double rest) =>
         rest < 0.5 ? Special.Elementary.Log1P(-rest) : Math.Log(probability);

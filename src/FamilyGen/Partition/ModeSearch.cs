@@ -12,6 +12,7 @@ internal readonly ref struct ModeSearch<TKernel>
     private const double ShortRun = 64;
 
     private const int MostModes = 1000;
+    private const double Reach = 64;
 
     private readonly TKernel _kernel;
     private readonly ReadOnlySpan<double> _theta;
@@ -116,7 +117,9 @@ internal readonly ref struct ModeSearch<TKernel>
         var (least, greatest) = _chart.SearchRange;
         var from = _chart.CoordinateOf(piece.Lower);
         var to = _chart.CoordinateOf(piece.Upper);
-        return (Math.Max(from, least), Math.Min(to, greatest));
+
+        // a range that lies closer to an end than doubles reach is searched as far again
+        return (Math.Max(from, Math.Min(least, to - Reach)), Math.Min(to, Math.Max(greatest, from + Reach)));
     }
 
     private SlopeField<TKernel> FieldOn(Piece piece, double from, double to)

@@ -16,6 +16,9 @@ internal sealed class RangePartition<TKernel>
     // and the linear part may exceed the whole deviation by this much at most, or digits are lost in their difference
     private const double MostCancellation = 64;
 
+    // Distances to an end whose logarithm is larger overflow in slopes.
+    private const double FarthestLog = 680;
+
     private RangePartition(BasinPart<TKernel>[] parts, MomentPlan plan, bool isProven)
     {
         (Parts, Plan, IsProven) = (parts, plan, isProven);
@@ -125,6 +128,10 @@ internal sealed class RangePartition<TKernel>
         var expansion = new Expansion<TKernel>(kernel, theta, new Frame(chart, basin.Mode), integer);
         if (expansion.IsUsable || basin.Piece.Step > 0 || !(basin.Lower < basin.Upper))
             return expansion;
+        if (Math.Abs(basin.Mode.LogAboveLower) > FarthestLog)
+            return new Expansion<TKernel>(kernel, theta, new Frame(chart, chart.ReferenceNear(Math.CopySign(FarthestLog, basin.Mode.LogAboveLower))), 0);
+        if (Math.Abs(basin.Mode.LogBelowUpper) > FarthestLog)
+            return new Expansion<TKernel>(kernel, theta, new Frame(chart, chart.ReferenceNear(-Math.CopySign(FarthestLog, basin.Mode.LogBelowUpper))), 0);
         var width = double.IsFinite(basin.Upper - basin.Lower) ? basin.Upper - basin.Lower : 1;
         for (var part = 1e-9; part < 1; part *= 10)
         {
@@ -158,7 +165,7 @@ internal sealed class RangePartition<TKernel>
     {
         if (!(end > 0) || Array.TrueForAll(plan.Tangential, tangential => !tangential))
             return;
-        var distance = Math.Max(step, BasinSweep<TKernel>.FoldDistance(panel, Math.Min(1, end / 2), end, direction));
+        var distance = Math.Max(step, BasinSweep<TKernel>.FoldDistance(panel, 0, Math.Min(1, end / 2), end, direction));
         panel.Log(direction * distance, out _);
         var displacement = expansion.Frame.At(direction * distance).Displacement;
         for (var j = 0; j < plan.Tangential.Length; j++)
