@@ -30,6 +30,7 @@ internal sealed class QuadratureRule
         for (var k = 1; k <= NodeCount; k++)
             root[k] = Math.Sqrt(recurrence(k));
         Recurrence = root;
+        InverseRecurrence = Array.ConvertAll(root, r => 1 / r);
         Nodes = Roots(root);
         Weights = new double[NodeCount];
         Witness = new double[NodeCount * WitnessCount];
@@ -48,6 +49,9 @@ internal sealed class QuadratureRule
 
     /// <summary>r₀ … r₂₀ of the orthonormal polynomials' recurrence xφₙ = rₙ₊₁φₙ₊₁ + rₙφₙ₋₁.</summary>
     public double[] Recurrence { get; }
+
+    /// <summary>1/rₙ.</summary>
+    public double[] InverseRecurrence { get; }
 
     /// <summary>The nodes in ascending order.</summary>
     public double[] Nodes { get; }

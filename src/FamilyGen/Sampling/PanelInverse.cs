@@ -18,9 +18,13 @@ internal sealed class PanelInverse
     private const int Cells = 32;
     private const double CellWidth = 2.0 / Cells;
     private const int MostSteps = 60;
+
+    // parts of the panel's mass: where a root is good, and from where one more step of Newton's makes it so
     private const double Tolerance = 1e-14;
+    private const double AlmostThere = 1e-8;
 
     private readonly double[] _root;                            // r₀ … r₂₀
+    private readonly double[] _inverseRoot;
     private readonly double[] _density = new double[Degree];
     private readonly double[] _mass = new double[Degree + 1];
     private readonly double[] _knotMass = new double[Cells + 1];
@@ -36,6 +40,7 @@ internal sealed class PanelInverse
     public PanelInverse(QuadratureRule rule, ReadOnlySpan<double> values, double count)
     {
         _root = rule.Recurrence;
+        _inverseRoot = rule.InverseRecurrence;
         _count = count;
         _isSmooth = rule == QuadratureRule.Interval;
         _rate = _isSmooth ? 0.5 : 0.5 - (0.5 / count);
@@ -62,6 +67,8 @@ internal sealed class PanelInverse
             if (next == x)
                 break;
             x = next;
+            if (Math.Abs(excess) <= AlmostThere * density)
+                break;
         }
 
         return x;
@@ -76,17 +83,17 @@ internal sealed class PanelInverse
 
         // x = −1 + 2·index/(L − 1), and the smooth curve passes through the middle of every step
         var index = Math.Clamp(Math.Round((Place(mass) + 1) / 2 * last), 0, last);
-        for (var step = 0; step < 2 && index < last && MassUpTo(index) < mass; step++)
-            index++;
-        for (var step = 0; step < 2 && index > 0 && MassUpTo(index - 1) >= mass; step++)
-            index--;
-        return index;
-    }
+        for (var step = 0; step < 2; step++)
+        {
+            var below = MassBelow((2 * index / last) - 1, out var density);
+            var half = density / (2 * _count);
+            var move = below + half < mass ? 1 : below - half >= mass ? -1 : 0;
+            if (move == 0 || index + move < 0 || index + move > last)
+                break;
+            index += move;
+        }
 
-    private double MassUpTo(double index)
-    {
-        var below = MassBelow((2 * index / (_count - 1)) - 1, out var density);
-        return below + (density / (2 * _count));
+        return index;
     }
 
     private void Expand(QuadratureRule rule, ReadOnlySpan<double> values)
@@ -112,17 +119,18 @@ internal sealed class PanelInverse
 
     private double MassBelow(double x, out double density)
     {
+        ReadOnlySpan<double> root = _root, inverseRoot = _inverseRoot, massTerms = _mass, densityTerms = _density;
         var (before, current) = (0.0, 1.0);
-        var mass = _mass[0];
-        density = _density[0];
-        for (var n = 1; n < Degree; n++)
+        var mass = massTerms[0];
+        density = densityTerms[0];
+        for (var n = 1; n < densityTerms.Length; n++)
         {
-            (before, current) = (current, ((x * current) - (_root[n - 1] * before)) / _root[n]);
-            mass += _mass[n] * current;
-            density += _density[n] * current;
+            (before, current) = (current, ((x * current) - (root[n - 1] * before)) * inverseRoot[n]);
+            mass += massTerms[n] * current;
+            density += densityTerms[n] * current;
         }
 
-        return mass + (_mass[Degree] * (((x * current) - (_root[Degree - 1] * before)) / _root[Degree]));
+        return mass + (massTerms[Degree] * ((x * current) - (root[Degree - 1] * before)) * inverseRoot[Degree]);
     }
 
     private int CellOf(double mass)

@@ -24,8 +24,8 @@ internal sealed class SweepInverse<TKernel>
     public SweepInverse(TKernel kernel, double[] theta)
     {
         var domain = kernel.Domain;
-        _least = domain.IsLattice || domain.LowerIncluded ? domain.Lower : Math.BitIncrement(domain.Lower);
-        _greatest = domain.IsLattice || domain.UpperIncluded ? domain.Upper : Math.BitDecrement(domain.Upper);
+        _least = domain.LowerIncluded ? domain.Lower : Math.BitIncrement(domain.Lower);
+        _greatest = domain.UpperIncluded ? domain.Upper : Math.BitDecrement(domain.Upper);
         var sinks = new List<PanelList>();
         _partition = RangePartition<TKernel>.Over(kernel, theta, SubRange.Whole, MomentPlan.None, part =>
         {
@@ -52,7 +52,7 @@ internal sealed class SweepInverse<TKernel>
         var mass = (probability - _below[i]) / (_below[i + 1] - _below[i]);
         var part = _partition.Parts[panel.Part];
         var x = part.Expansion.Frame.At(Offset(i, panel, Math.Clamp(mass, 0, 1)), part.Expansion.Reference.Integer).X;
-        return Math.Clamp(x, _least, _greatest);
+        return panel.Shape == PanelShape.Interval ? Math.Clamp(x, _least, _greatest) : x;
     }
 
     private double Offset(int i, in SweptPanel panel, double mass)

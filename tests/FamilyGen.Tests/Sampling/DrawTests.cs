@@ -64,6 +64,37 @@ public class DrawTests
         Batch<Binomial12>(9, -0.4), 0, 12, x => MathNet.Numerics.Distributions.Binomial.PMF(1 / (1 + Math.Exp(0.4)), 12, (int)x));
 
     [Fact]
+    public void A_point_with_probability_of_its_own_is_drawn_exactly()
+    {
+        // odds of zero against the rest: e^θ₁ to 1/2
+        var draws = Batch<DurationWithZeros>(16, 0, -2);
+        var zeros = draws.Count(x => x == 0);
+        Assert.InRange(zeros, (Many * 2 / 3.0) - 800, (Many * 2 / 3.0) + 800);      // five standard errors
+        GoodnessOfFit.Kolmogorov([.. draws.Where(x => x > 0)], x => 1 - Math.Exp(-2 * x));
+    }
+
+    [Fact]
+    public void Heaped_counts_pass_the_chi_squared_test()
+    {
+        var member = Member<HeapedCount>(-0.01, 1.2);
+        GoodnessOfFit.ChiSquared(Batch<HeapedCount>(17, -0.01, 1.2), 0, 1000, x => Math.Exp(member.LogDensity(x)));
+    }
+
+    [Fact]
+    public void Opaque_counts_pass_the_chi_squared_test()
+    {
+        var member = Member<OpaqueCount>(0.7, -0.2);
+        GoodnessOfFit.ChiSquared(Batch<OpaqueCount>(18, 0.7, -0.2), 0, 100, x => Math.Exp(member.LogDensity(x)));
+    }
+
+    [Fact]
+    public void Steps_pass_Kolmogorovs_test()
+    {
+        var (low, total) = (Math.Exp(1.5), Math.Exp(1.5) + 2);
+        GoodnessOfFit.Kolmogorov(Batch<Steps>(19, 1.5), x => (x < 1 ? low * x : low + x - 1) / total);
+    }
+
+    [Fact]
     public void The_same_seed_gives_the_same_batch_and_another_seed_another()
     {
         Assert.Equal(Batch<Gamma>(11, 1, -1), Batch<Gamma>(11, 1, -1));
