@@ -36,10 +36,11 @@ internal static class FamilyEmitter
     /// throw, so that the one message about the declaration brings no others with it.</summary>
     public static string EmitStub(FamilyDeclaration declaration)
     {
+        declaration = StubNames.Distinct(declaration);
         var writer = new SourceWriter();
         OpenFile(declaration, writer);
         writer.Open($"partial class {Names.Identifier(declaration.Name)}");
-        var members = new MemberWriter(writer, $"{declaration.Name} is not a valid family: see the build's messages.", declaration.MemberNames);
+        var members = new MemberWriter(writer, $"{declaration.Name} is not a valid family: see the build's messages.", declaration.MemberNames.Append(declaration.Name));
         WriteFace(declaration, StubForm.Of(declaration), writer, members);
         return writer.ToString();
     }

@@ -41,7 +41,8 @@ internal sealed class FitEmitter
         _members.Block("TryFit", $"public static bool TryFit({_signature.WithKnown(data)}, {Outcome})", [.. gathering, "return accumulator.TryFit(out result, out account);"],
             ["<summary>The maximum-likelihood fit, or false with an account of why the likelihood has no maximum.</summary>", .. parameters,
             "<param name=\"result\">The fit.</param>", "<param name=\"account\">Why there is none.</param>", badData]);
-        WriteAccumulator();
+        if (!_members.IsTaken("Accumulator"))
+            WriteAccumulator();
     }
 
     private void WriteAccumulator()

@@ -9,17 +9,25 @@ namespace FamilyGen.Generator.Emission;
 /// has already.</summary>
 internal sealed class MemberWriter(SourceWriter writer, string? refusal, IEnumerable<string> taken)
 {
-    private readonly HashSet<string> _taken = new(taken);
+    // Every class inherits these.
+    private static readonly string[] s_ofObject = ["Equals", "GetHashCode", "GetType", "MemberwiseClone", "ReferenceEquals", "ToString"];
+
+    private readonly HashSet<string> _taken = new(taken.Concat(s_ofObject));
 
     public bool IsStub => refusal is not null;
 
     private string Throw => $"throw new global::System.InvalidOperationException(\"{refusal}\")";
+
+    /// <summary>Whether a stub has to leave this name to the user's class, or to a property that has it already.</summary>
+    public bool IsTaken(string name) => IsStub && _taken.Contains(name);
 
     /// <summary>A member with an expression for a body.</summary>
     public void Expression(string name, string head, string body, params string[] documentation)
     {
         if (!Begin(name, documentation))
             return;
+        if (IsStub && name.Length > 0 && !head.Contains("("))
+            _taken.Add(name);
         writer.Line($"{head} => {(IsStub ? Throw : body)};");
         writer.Line();
     }
@@ -54,13 +62,14 @@ internal sealed class MemberWriter(SourceWriter writer, string? refusal, IEnumer
     {
         if (GeneratedNames.IsReserved(name) || !Begin(name, [documentation]))
             return;
+        _taken.Add(name);
         writer.Line($"public {type} {name} {(IsStub ? $"=> {Throw};" : "{ get; }")}");
         writer.Line();
     }
 
     private bool Begin(string name, string[] documentation)
     {
-        if (IsStub && _taken.Contains(name))
+        if (IsTaken(name))
             return false;
         foreach (var line in documentation.Where(d => d.Length > 0))
             writer.Line("/// " + line);

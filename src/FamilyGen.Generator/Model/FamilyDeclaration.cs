@@ -9,8 +9,7 @@ internal enum ObservationType
     Double,
 }
 
-/// <summary>One type around the declared one, from the outside in: "class", "Outer"; the name of a generic type
-/// carries its type parameters.</summary>
+/// <summary>One type around the declared one, from the outside in: "class", "Outer".</summary>
 internal sealed record TypeShell(string Keyword, string Name);
 
 /// <summary>A known value: an argument of declared members that is never estimated. <paramref name="Type"/> is a C#
@@ -61,9 +60,6 @@ internal sealed record FamilyDeclaration(
     /// <summary>The names of all members that the user's class has, so that a stub does not declare them again.</summary>
     public EquatableArray<string> MemberNames { get; init; } = EquatableArray<string>.Empty;
 
-    /// <summary>The type parameters of an (invalid) generic declaration, "&lt;T&gt;", so that stubs can be added to it.</summary>
-    public string TypeParameters { get; init; } = "";
-
     /// <summary>Whether the family is written with a kernel and trade parameters.</summary>
     public bool IsTrade => Kernel is not null;
 
@@ -74,14 +70,8 @@ internal sealed record FamilyDeclaration(
         {
             var name = Namespace.Length == 0 ? "" : Namespace + ".";
             foreach (var shell in Outer)
-                name += WithArity(shell.Name) + "+";
-            return name + WithArity(Name + TypeParameters);
+                name += shell.Name + "+";
+            return name + Name;
         }
-    }
-
-    private static string WithArity(string name)
-    {
-        var bracket = name.IndexOf('<');
-        return bracket < 0 ? name : name.Substring(0, bracket) + "`" + name.Split(',').Length;
     }
 }

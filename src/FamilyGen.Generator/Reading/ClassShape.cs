@@ -82,11 +82,17 @@ internal static class ClassShape
     {
         var family = session.Family;
         if (family.TypeParameters.Length > 0)
+        {
             session.Refuse(origin, ShapeFault.Generic(family.Name));
+            return false;
+        }
+
         for (var outer = family.ContainingType; outer is not null; outer = outer.ContainingType)
         {
-            if (outer.TypeParameters.Length > 0)
-                session.Refuse(session.Mark(outer), ShapeFault.InGeneric(outer.Name, family.Name));
+            if (outer.TypeParameters.Length == 0)
+                continue;
+            session.Refuse(session.Mark(outer), ShapeFault.InGeneric(outer.Name, family.Name));
+            return false;
         }
 
         return true;

@@ -38,7 +38,6 @@ internal sealed class DeclarationReader(ReadingSession session, DeclaredMembers 
             _signatures.Parameters)
         {
             MemberNames = NamesInUse.Own(session).ToEquatableArray(),
-            TypeParameters = SyntaxFactsOf.TypeParameters(family),
         };
     }
 
@@ -46,7 +45,7 @@ internal sealed class DeclarationReader(ReadingSession session, DeclaredMembers 
     {
         var shells = new List<TypeShell>();
         for (var outer = family.ContainingType; outer is not null; outer = outer.ContainingType)
-            shells.Insert(0, new TypeShell(SyntaxFactsOf.Keyword(outer), outer.Name + SyntaxFactsOf.TypeParameters(outer)));
+            shells.Insert(0, new TypeShell(SyntaxFactsOf.Keyword(outer), outer.Name));
         return shells.ToEquatableArray();
     }
 

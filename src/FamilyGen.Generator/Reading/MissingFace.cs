@@ -28,7 +28,7 @@ internal static class MissingFace
             text.Append("namespace ").Append(declaration.Namespace).Append(";\n");
         foreach (var shell in declaration.Outer)
             text.Append("partial ").Append(shell.Keyword).Append(" @").Append(shell.Name).Append(" {\n");
-        text.Append("partial class @").Append(declaration.Name).Append(declaration.TypeParameters).Append(" {\n");
+        text.Append("partial class @").Append(declaration.Name).Append(" {\n");
         foreach (var member in GeneratedFace.MissingMembers(declaration, family))
             text.Append(member).Append('\n');
         text.Append('}', declaration.Outer.Count + 1);

@@ -1,4 +1,3 @@
-using System.Linq;
 using Microsoft.CodeAnalysis;
 
 namespace FamilyGen.Generator.Reading;
@@ -35,8 +34,4 @@ internal static class SyntaxFactsOf
         { TypeKind: TypeKind.Interface } => "interface",
         _ => "class",
     };
-
-    public static string TypeParameters(INamedTypeSymbol type) => type.TypeParameters.IsEmpty
-        ? ""
-        : "<" + string.Join(", ", type.TypeParameters.Select(p => p.Name)) + ">";
 }
