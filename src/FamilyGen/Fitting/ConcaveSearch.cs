@@ -11,6 +11,7 @@ namespace FamilyGen.Fitting;
 /// <param name="Multipliers">For each wall of the face, the rise of the likelihood of a unit of weight beyond it.</param>
 /// <param name="Path">The parameters that the search went through.</param>
 /// <param name="Iterations">The steps taken, those on tried faces included.</param>
+/// <param name="IsEndless">Whether the search went on, without a sign of an end, until it was stopped.</param>
 /// <param name="Reason">Why an evaluation failed, if one did.</param>
 internal sealed record SearchOutcome<TKernel>(
     ModelPoint<TKernel>? Maximum,
@@ -18,6 +19,7 @@ internal sealed record SearchOutcome<TKernel>(
     double[] Multipliers,
     IReadOnlyList<double[]> Path,
     int Iterations,
+    bool IsEndless,
     string? Reason)
     where TKernel : struct, IKernel;
 
@@ -35,6 +37,9 @@ internal sealed class ConcaveSearch<TKernel>(StatisticSums<TKernel> sums)
     private const int StepsThatProveDivergence = 40;
     private const double Converged = 1e-14;
 
+    // Where θ itself has too few digits for the decrement to become small, it stands still at the size of their rounding.
+    private const int MaximalStandstill = 6;
+
     // Below this decrement the law is quadratic to within rounding if it is near a maximum at all.
     private const double Quadratic = 1e-5;
 
@@ -46,7 +51,7 @@ internal sealed class ConcaveSearch<TKernel>(StatisticSums<TKernel> sums)
     {
         var face = Face.Whole(sums.Kernel.NaturalSet, TKernel.Count);
         var start = StartingPoints<TKernel>.Best(sums, face, _unit, out var reason);
-        return start is null ? new(null, face, [], [], 0, reason) : Climb(start, face);
+        return start is null ? new(null, face, [], [], 0, false, reason) : Climb(start, face);
     }
 
     private SearchOutcome<TKernel> Climb(ModelPoint<TKernel> point, Face face)
@@ -54,22 +59,23 @@ internal sealed class ConcaveSearch<TKernel>(StatisticSums<TKernel> sums)
         var path = new List<double[]> { point.Theta };
         var tried = new HashSet<Wall>();
         string? reason = null;
-        var previous = (Point: point, Decrement: double.PositiveInfinity);
-        var isSteady = false;
+        var best = (Point: point, Decrement: double.PositiveInfinity);
+        var (isSteady, sinceBest) = (false, 0);
         var unsteady = 0;
         for (var steps = 0; steps < MaximalSteps && unsteady < StepsThatProveDivergence; steps++)
         {
             if (NewtonStep.TryFrom(point, face) is not { } step)
                 break;
-            if (isSteady && step.Decrement < Quadratic && (step.Decrement <= Converged || step.Decrement > previous.Decrement / 4))
-            {
-                var best = step.Decrement <= previous.Decrement ? point : previous.Point;
-                return new(best, face, Multipliers(best, face), path, _iterations, null);
-            }
+            var isLower = step.Decrement < 0.25 * best.Decrement;
+            sinceBest = isLower ? 0 : sinceBest + 1;
+            if (step.Decrement < best.Decrement)
+                best = (point, step.Decrement);
+            if (isSteady && (best.Decrement <= Converged || (sinceBest > 0 && best.Decrement < Quadratic) || sinceBest > MaximalStandstill))
+                return new(best.Point, face, Multipliers(best.Point, face), path, _iterations, false, null);
 
             var (room, wall) = Room(face, point.Theta, step.Change);
             if (room < 1 && wall is not null && face.CanHold(wall) && tried.Add(wall)
-                && OnFace(face.With(wall), point, step, room) is { Maximum: not null } held)
+                && OnFace(face.With(wall), point, step, room) is { } held)
             {
                 return held;
             }
@@ -80,16 +86,15 @@ internal sealed class ConcaveSearch<TKernel>(StatisticSums<TKernel> sums)
             var ratio = next.CurvatureAlong(step.Change) / point.CurvatureAlong(step.Change);
             isSteady = ratio is > 0.7 and < 1.4 && length == 1;
             unsteady = isSteady || length < 1 ? 0 : unsteady + 1;
-            previous = (point, step.Decrement);
             point = next;
             path.Add(point.Theta);
             _iterations++;
         }
 
-        return new(null, face, [], path, _iterations, reason);
+        return new(null, face, Multipliers(point, face), path, _iterations, unsteady > 3, reason);
     }
 
-    /// <summary>The maximum on a face, if it is the maximum of the whole set.</summary>
+    /// <summary>What the search on a face finds, if it holds for the whole set.</summary>
     private SearchOutcome<TKernel>? OnFace(Face face, ModelPoint<TKernel> from, NewtonStep step, double room)
     {
         if (face.Limits is null)
@@ -100,7 +105,7 @@ internal sealed class ConcaveSearch<TKernel>(StatisticSums<TKernel> sums)
         {
             if (ModelPoint<TKernel>.TryAt(sums, theta, out _) is not { } corner || Multipliers(corner, face) is not { } rise || rise.Any(IsInward))
                 return null;
-            return new(corner, face, rise, [theta], _iterations, null);
+            return new(corner, face, rise, [theta], _iterations, false, null);
         }
 
         var start = sums.Kernel.NaturalSet.Contains(theta) && ModelPoint<TKernel>.TryAt(sums, theta, out _) is { } point
@@ -109,8 +114,11 @@ internal sealed class ConcaveSearch<TKernel>(StatisticSums<TKernel> sums)
             : StartingPoints<TKernel>.Best(sums, face, _unit, out _);
         if (start is null)
             return null;
+
+        // Where the likelihood rises without end on the face and the wall keeps it from rising further, it does so on the
+        // whole set: the face's account is the answer too.
         var outcome = Climb(start, face);
-        return outcome.Maximum is null || outcome.Multipliers.Any(IsInward) ? null : outcome;
+        return outcome.Maximum is null && !outcome.IsEndless || outcome.Multipliers.Any(IsInward) ? null : outcome;
     }
 
     /// <summary>A rise towards the inside, beyond what rounding can feign.</summary>

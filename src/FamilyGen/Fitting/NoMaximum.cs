@@ -18,20 +18,36 @@ internal static class NoMaximum
         return sums.TotalWeight > 0 ? null : $"{family} cannot be fitted: the weights of all {Number(sums.Count)} observations are 0.";
     }
 
-    /// <summary>The account of a search that found no maximum.</summary>
+    /// <summary>The account of a search in the natural parameters that found no maximum.</summary>
     public static string Account<TKernel>(StatisticSums<TKernel> sums, string family, SearchPath path)
+        where TKernel : struct, IKernel => Account(sums, family, path, path.Direction(Extremes(sums)) ?? path.Direction());
+
+    /// <summary>The account of a search that can be told in the trade parameters.</summary>
+    public static string Account<TKernel>(StatisticSums<TKernel> sums, string family, SearchPath trade, SearchPath natural)
+        where TKernel : struct, IKernel => trade.Direction() is { } direction
+        ? Account(sums, family, trade, direction)
+        : Account(sums, family, natural);
+
+    private static string Account<TKernel>(StatisticSums<TKernel> sums, string family, SearchPath path, string? direction)
         where TKernel : struct, IKernel
     {
-        if (path.Points.Count == 0)
-            return $"{family} cannot be fitted: the search for the maximum of the likelihood found no place to start. {Sentence(path.Reason)}{Cause(sums)}{Advice}.";
-        if (path.Direction() is { } direction)
-            return $"{family} has no maximum-likelihood fit to these data: the likelihood never stops rising as {direction}. {Cause(sums)}{Advice}.";
-        return $"{family} could not be fitted: the search for the maximum of the likelihood stopped after {Number(path.Points.Count - 1)} steps at "
-            + $"{Values(path.Names, path.Points[^1])}. {Sentence(path.Reason)}{Cause(sums)}{Advice}.";
+        var cause = Cause(sums);
+        if (direction is not null)
+        {
+            cause ??= "The means of the statistics lie on the edge of what the laws of the family can have";
+            return $"{family} has no maximum-likelihood fit to these data: the likelihood never stops rising as {direction}. {cause}. {Advice}.";
+        }
+
+        var where = path.Points.Count == 0
+            ? $"{family} cannot be fitted: the search for the maximum of the likelihood found no place to start"
+            : $"{family} could not be fitted: the search for the maximum of the likelihood stopped after {Number(path.Points.Count - 1)} steps at {Values(path.Names, path.Points[^1])}";
+        return cause is null
+            ? $"{where}. {Sentence(path.Reason)}Observations in another unit, or counted from a point among them, may be easier to fit."
+            : $"{where}. {Sentence(path.Reason)}{cause}. {Advice}.";
     }
 
-    /// <summary>A sentence, with a blank after it, on what in the data leaves the parameters undetermined.</summary>
-    public static string Cause<TKernel>(StatisticSums<TKernel> sums)
+    /// <summary>What in the data leaves the parameters undetermined; null when nothing is known.</summary>
+    private static string? Cause<TKernel>(StatisticSums<TKernel> sums)
         where TKernel : struct, IKernel
     {
         var distinct = sums.Distinct.Values;
@@ -42,50 +58,56 @@ internal static class NoMaximum
                 : distinct[0] == domain.Upper ? ", the largest value the support allows"
                 : "";
             return sums.Count == 1
-                ? $"There is a single observation, {ObservationRule.Text(distinct[0])}{end}. "
-                : $"Every one of the {Number(sums.Count)} observations is {ObservationRule.Text(distinct[0])}{end}. ";
+                ? $"There is a single observation, {ObservationRule.Text(distinct[0])}{end}"
+                : $"Every one of the {Number(sums.Count)} observations is {ObservationRule.Text(distinct[0])}{end}";
         }
 
+        var extremes = Extremes(sums);
         for (var j = 0; j < TKernel.Count; j++)
         {
-            if (sums.Smallest[j] == sums.Largest[j] && ExtremeOf(sums, j) is { } extreme)
+            if (extremes[j] != 0)
             {
                 return $"The statistic of '{TKernel.NaturalNames[j]}' is {ObservationRule.Text(sums.Smallest[j])} in every observation, "
-                    + $"and no value of the support has a {extreme} one. ";
+                    + $"and no value of the support has a {(extremes[j] > 0 ? "larger" : "smaller")} one";
             }
         }
 
-        if (distinct.Length > 0 && distinct.Length <= TKernel.Count + 1)
-        {
-            var values = new string[distinct.Length];
-            for (var i = 0; i < values.Length; i++)
-                values[i] = ObservationRule.Text(distinct[i]);
-            return $"The {Number(sums.Count)} observations take only the values {string.Join(", ", values[..^1])} and {values[^1]}, "
-                + $"which do not determine {Number(TKernel.Count)} parameter{(TKernel.Count == 1 ? "" : "s")}. ";
-        }
-
-        return "The means of the statistics lie on the edge of what the laws of the family can have. ";
+        if (distinct.Length == 0 || distinct.Length > TKernel.Count + 1)
+            return null;
+        var values = new string[distinct.Length];
+        for (var i = 0; i < values.Length; i++)
+            values[i] = ObservationRule.Text(distinct[i]);
+        return $"The {Number(sums.Count)} observations take only the values {string.Join(", ", values[..^1])} and {values[^1]}, "
+            + $"which do not determine {Number(TKernel.Count)} parameter{(TKernel.Count == 1 ? "" : "s")}";
     }
 
-    /// <summary>Whether the value that statistic j has in all data is the least ("smaller") or the greatest ("larger") on the
-    /// support; null when neither.</summary>
-    private static string? ExtremeOf<TKernel>(StatisticSums<TKernel> sums, int j)
+    /// <summary>For each statistic 1 where all data have the largest value it takes on the support, −1 where they have the
+    /// smallest, else 0: in that direction of its parameter the likelihood cannot stop rising.</summary>
+    private static int[] Extremes<TKernel>(StatisticSums<TKernel> sums)
         where TKernel : struct, IKernel
     {
-        var value = new double[TKernel.Count + 1];
-        var remainder = new double[TKernel.Count + 1];
-        var constant = sums.Smallest[j];
-        var (isLeast, isGreatest) = (true, true);
+        var k = TKernel.Count;
+        var (isLeast, isGreatest) = (new bool[k], new bool[k]);
+        for (var j = 0; j < k; j++)
+            isLeast[j] = isGreatest[j] = sums.Smallest[j] == sums.Largest[j];
+        var value = new double[k + 1];
+        var remainder = new double[k + 1];
         foreach (var x in SupportProbe.Points(sums.Kernel.Domain, sums.Minimum, sums.Maximum))
         {
             sums.Kernel.Evaluate(sums.Kernel.Domain.At(x), value, remainder);
-            if (!double.IsFinite(value[TKernel.Count]))
+            if (!double.IsFinite(value[k]))
                 continue;
-            isLeast &= !(value[j] < constant);
-            isGreatest &= !(value[j] > constant);
+            for (var j = 0; j < k; j++)
+            {
+                isLeast[j] &= !(value[j] < sums.Smallest[j]);
+                isGreatest[j] &= !(value[j] > sums.Largest[j]);
+            }
         }
 
-        return isLeast == isGreatest ? null : isLeast ? "smaller" : "larger";
+        var signs = new int[k];
+        for (var j = 0; j < k; j++)
+            signs[j] = isLeast[j] == isGreatest[j] ? 0 : isGreatest[j] ? 1 : -1;
+        return signs;
     }
 
     private static string Values(string[] names, double[] values)

@@ -78,7 +78,7 @@ internal static class ObservationRule
     /// <summary>A number in invariant writing.</summary>
     public static string Text(double x) => double.IsNaN(x) ? "NaN"
         : double.IsInfinity(x) ? (x > 0 ? "∞" : "−∞")
-        : x.ToString("R", CultureInfo.InvariantCulture);
+        : (x + 0.0).ToString("R", CultureInfo.InvariantCulture);
 
     private static bool IsInside(double x, Domain domain) =>
         (x > domain.Lower && x < domain.Upper)

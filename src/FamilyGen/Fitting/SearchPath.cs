@@ -50,26 +50,43 @@ internal sealed record SearchPath(string[] Names, IReadOnlyList<double[]> Points
     public string? Direction()
     {
         const int Shortest = 6;
-        if (Points.Count < Shortest)
-            return null;
-        var (middle, last) = (Points[Points.Count / 2], Points[^1]);
         var parts = new List<string>();
-        for (var i = 0; i < Names.Length; i++)
+        for (var i = 0; i < Names.Length && Points.Count >= Shortest; i++)
         {
-            var drift = last[i] - middle[i];
-            if (double.IsFinite(Lower[i]) && drift < 0 && last[i] - Lower[i] < 0.5 * (middle[i] - Lower[i]))
+            var (middle, last) = (Points[Points.Count / 2][i], Points[^1][i]);
+            if (double.IsFinite(Lower[i]) && last < middle && last - Lower[i] < 0.5 * (middle - Lower[i]))
                 parts.Add($"{Names[i]} → {ObservationRule.Text(Lower[i])}");
-            else if (double.IsFinite(Upper[i]) && drift > 0 && Upper[i] - last[i] < 0.5 * (Upper[i] - middle[i]))
+            else if (double.IsFinite(Upper[i]) && last > middle && Upper[i] - last < 0.5 * (Upper[i] - middle))
                 parts.Add($"{Names[i]} → {ObservationRule.Text(Upper[i])}");
-            else if (Math.Abs(drift) > 0.2 * Math.Abs(last[i]) && Math.Abs(last[i]) > Math.Abs(middle[i]))
-                parts.Add($"{Names[i]} → {(drift > 0 ? "∞" : "−∞")}");
+            else if (Math.Abs(last - middle) > 0.2 * Math.Abs(last) && Math.Abs(last) > Math.Abs(middle))
+                parts.Add($"{Names[i]} → {(last > middle ? "∞" : "−∞")}");
         }
 
-        return parts.Count switch
-        {
-            0 => null,
-            1 => parts[0],
-            _ => $"{string.Join(", ", parts.GetRange(0, parts.Count - 1))} and {parts[^1]}",
-        };
+        return Join(parts);
     }
+
+    /// <summary>The directions among the given signs of parameters that the search took, or all of them where it took none;
+    /// null when there are none.</summary>
+    public string? Direction(ReadOnlySpan<int> signs)
+    {
+        var (all, taken) = (new List<string>(), new List<string>());
+        for (var i = 0; i < signs.Length; i++)
+        {
+            if (signs[i] == 0)
+                continue;
+            var part = $"{Names[i]} → {(signs[i] > 0 ? "∞" : "−∞")}";
+            all.Add(part);
+            if (Points.Count > 1 && signs[i] * (Points[^1][i] - Points[Points.Count / 2][i]) > 0)
+                taken.Add(part);
+        }
+
+        return Join(taken.Count > 0 ? taken : all);
+    }
+
+    private static string? Join(List<string> parts) => parts.Count switch
+    {
+        0 => null,
+        1 => parts[0],
+        _ => $"{string.Join(", ", parts.GetRange(0, parts.Count - 1))} and {parts[^1]}",
+    };
 }

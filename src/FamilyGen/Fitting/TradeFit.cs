@@ -23,7 +23,11 @@ internal static class TradeFit
 
         if (outcome.Maximum is null)
         {
-            account = NoMaximum.Account(sums, family, SearchPath.InTrade(sums.Kernel, outcome.Path, outcome.Reason));
+            account = NoMaximum.Account(
+                sums,
+                family,
+                SearchPath.InTrade(sums.Kernel, outcome.Path, outcome.Reason),
+                SearchPath.InNatural<TKernel>(outcome.Path, outcome.Reason));
             return null;
         }
 
@@ -121,7 +125,11 @@ internal static class TradeFit
             ? $" The maximum over all laws with these statistics, {Natural<TKernel>(outcome.Maximum!.Theta)}, is out of the reach of the parameters as they are declared."
             : "";
         IReadOnlyList<double[]> path = climbs.Count == 0 ? [] : climbs[0].Path;
-        account = NoMaximum.Account(sums, family, SearchPath.OfTrade(sums.Kernel, path, reason));
+        account = NoMaximum.Account(
+            sums,
+            family,
+            SearchPath.OfTrade(sums.Kernel, path, reason),
+            SearchPath.InNatural<TKernel>(outcome.Path, outcome.Reason));
         account += unreached;
         return null;
     }
