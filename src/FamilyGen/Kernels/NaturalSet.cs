@@ -7,12 +7,21 @@ namespace FamilyGen.Kernels;
 
 /// <summary>The set of natural parameters: those for which the integral of the exponential converges at every end of the
 /// support and of its pieces.</summary>
-public sealed class NaturalSet(ImmutableArray<EndGrowth> ends)
+public sealed class NaturalSet
 {
-    private readonly EndScale[] _scales = [.. ends.Select(end => new EndScale(end))];
+    private readonly EndScale[] _scales;
+    private readonly ImmutableArray<Wall> _walls;
+
+    /// <summary>The set for the growth of the exponent at each end of the support and of its pieces.</summary>
+    public NaturalSet(ImmutableArray<EndGrowth> ends)
+    {
+        Ends = ends;
+        _scales = [.. ends.Select(end => new EndScale(end))];
+        _walls = [.. _scales.Select(scale => WallFrom(scale, 0, new()).Wall).OfType<Wall>()];
+    }
 
     /// <summary>The ends of the support and of its pieces.</summary>
-    public ImmutableArray<EndGrowth> Ends { get; } = ends;
+    public ImmutableArray<EndGrowth> Ends { get; }
 
     /// <summary>Whether the normalizer is finite at θ.</summary>
     public bool Contains(ReadOnlySpan<double> theta) => IsFinite(theta, default, default);
@@ -75,7 +84,7 @@ public sealed class NaturalSet(ImmutableArray<EndGrowth> ends)
     }
 
     /// <summary>The hyperplanes that limit the set, one for each end that does not converge for every θ.</summary>
-    public ImmutableArray<Wall> Walls() => [.. _scales.Select(scale => WallFrom(scale, 0, new()).Wall).OfType<Wall>()];
+    public ImmutableArray<Wall> Walls() => _walls;
 
     private static bool AllFinite(ReadOnlySpan<double> theta)
     {

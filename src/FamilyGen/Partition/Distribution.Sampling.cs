@@ -46,5 +46,5 @@ public sealed partial class Distribution<TKernel>
             draw = checked((long)inverse.At(bits.NextUniform()));
     }
 
-    private SweepInverse<TKernel> Inverse => LazyInitializer.EnsureInitialized(ref _inverse, () => new(_kernel, _theta));
+    private SweepInverse<TKernel> Inverse => LazyInitializer.EnsureInitialized(ref _inverse, () => new(Tables, _domain));
 }

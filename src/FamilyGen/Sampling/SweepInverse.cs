@@ -1,5 +1,6 @@
 using System;
 using System.Collections.Generic;
+using System.Linq;
 using System.Threading;
 using FamilyGen.Kernels;
 using FamilyGen.Partition;
@@ -13,32 +14,35 @@ namespace FamilyGen.Sampling;
 internal sealed class SweepInverse<TKernel>
     where TKernel : struct, IKernel
 {
-    private readonly RangePartition<TKernel> _partition;
-    private readonly SweptPanel[] _panels;
+    private readonly (Panel Panel, Expansion<TKernel> Expansion)[] _panels;
     private readonly double[] _below;               // the probability below each panel, and 1 at the end
     private readonly int[] _guide;                  // for each part of (0, 1), the panel that holds its lower end
     private readonly object?[] _inverses;           // PanelInverse, or double[] of cumulative terms
     private readonly double _least;
     private readonly double _greatest;
 
-    public SweepInverse(TKernel kernel, double[] theta)
+    public SweepInverse(WeightTables<TKernel> tables, Domain domain)
     {
-        var domain = kernel.Domain;
         _least = domain.LowerIncluded ? domain.Lower : Math.BitIncrement(domain.Lower);
         _greatest = domain.UpperIncluded ? domain.Upper : Math.BitDecrement(domain.Upper);
-        var sinks = new List<PanelList>();
-        _partition = RangePartition<TKernel>.Over(kernel, theta, SubRange.Whole, MomentPlan.None, part =>
+        var panels = new List<(Panel, Expansion<TKernel>)>();
+        var below = new List<double> { 0 };
+        foreach (var i in tables.IsOrdered ? tables.Order : Enumerable.Range(0, tables.Tables.Length))
         {
-            sinks.Add(new(part));
-            return sinks[^1];
-        });
-        var panels = new List<SweptPanel>();
-        foreach (var sink in sinks)
-            panels.AddRange(sink.Ordered());
+            var table = tables.Tables[i];
+            foreach (var panel in table.Panels)
+            {
+                if (!(panel.Weight > 0))
+                    continue;
+                panels.Add((panel, table.Part.Expansion));
+                below.Add(below[^1] + (tables.Unit[i] * panel.Weight));
+            }
+        }
+
         _panels = [.. panels];
-        _inverses = new object?[_panels.Length];
-        _below = Accumulate();
+        _below = [.. below.Select(sum => sum / below[^1])];
         _guide = Guide(_below, 2 * _panels.Length);
+        _inverses = new object?[_panels.Length];
     }
 
     /// <summary>The observation at a probability in (0, 1). One that would round to an open end of the support, or
@@ -48,53 +52,54 @@ internal sealed class SweepInverse<TKernel>
         var i = _guide[(int)(probability * _guide.Length)];
         while (i + 1 < _panels.Length && _below[i + 1] <= probability)
             i++;
-        ref readonly var panel = ref _panels[i];
-        var mass = (probability - _below[i]) / (_below[i + 1] - _below[i]);
-        var part = _partition.Parts[panel.Part];
-        var x = part.Expansion.Frame.At(Offset(i, panel, Math.Clamp(mass, 0, 1)), part.Expansion.Reference.Integer).X;
-        return panel.Shape == PanelShape.Interval ? Math.Clamp(x, _least, _greatest) : x;
+        var mass = Math.Clamp((probability - _below[i]) / (_below[i + 1] - _below[i]), 0, 1);
+        var (panel, expansion) = _panels[i];
+        var inverse = InverseOf(i);
+        var offset = panel.Start + (panel.Kind switch
+        {
+            PanelKind.Interval => panel.Extent * (((PanelInverse)inverse).Place(mass) + 1) / 2,
+            PanelKind.Run => panel.Step * ((PanelInverse)inverse).Index(mass),
+            _ => panel.Step * IndexOf((double[])inverse, mass),
+        });
+        var x = expansion.Frame.At(offset, expansion.Reference.Integer).X;
+        return panel.Kind == PanelKind.Interval ? Math.Clamp(x, _least, _greatest) : x;
     }
 
-    private double Offset(int i, in SweptPanel panel, double mass)
+    private object InverseOf(int i)
     {
-        var inverse = Volatile.Read(ref _inverses[i]);
-        if (inverse is null)
+        if (Volatile.Read(ref _inverses[i]) is { } known)
+            return known;
+        var (panel, expansion) = _panels[i];
+        object inverse = panel.Kind switch
         {
-            inverse = Invert(panel);
-            Volatile.Write(ref _inverses[i], inverse);
-        }
-
-        if (panel.Shape == PanelShape.Interval)
-            return panel.Start + (panel.Step * (((PanelInverse)inverse).Place(mass) + 1) / 2);
-        var index = panel.Shape == PanelShape.Run ? ((PanelInverse)inverse).Index(mass) : IndexOf((double[])inverse, mass);
-        return panel.Start + (panel.Step * index);
+            PanelKind.Interval => Inverse(expansion, QuadratureRule.Interval, panel.Start + (panel.Extent / 2), panel.Extent / 2, double.PositiveInfinity),
+            PanelKind.Run => Inverse(
+                expansion,
+                QuadratureRule.Lattice((int)Math.Log2(panel.Extent), out var half),
+                panel.Start + (panel.Step * (panel.Extent - 1) / 2),
+                panel.Step * half,
+                panel.Extent),
+            _ => Cumulative(expansion, panel),
+        };
+        Volatile.Write(ref _inverses[i], inverse);
+        return inverse;
     }
 
-    private object Invert(in SweptPanel panel)
+    private static PanelInverse Inverse(Expansion<TKernel> expansion, QuadratureRule rule, double middle, double halfWidth, double count)
     {
-        var sum = new PanelSum<TKernel>(_partition.Parts[panel.Part].Expansion, MomentPlan.None);
-        if (panel.Shape == PanelShape.Terms)
-        {
-            var cumulative = new double[(int)panel.Count];
-            var total = 0.0;
-            for (var k = 0; k < cumulative.Length; k++)
-                cumulative[k] = total += Math.Exp(sum.Log(panel.Start + (panel.Step * k), out _));
-            return cumulative;
-        }
-
-        var rule = QuadratureRule.Interval;
-        var half = 0.5;
-        var middle = 0.5;
-        if (panel.Shape == PanelShape.Run)
-        {
-            rule = QuadratureRule.Lattice((int)Math.Log2(panel.Count), out half);
-            middle = (panel.Count - 1) / 2;
-        }
-
         Span<double> values = stackalloc double[QuadratureRule.NodeCount];
         for (var k = 0; k < values.Length; k++)
-            values[k] = Math.Exp(sum.Log(panel.Start + (panel.Step * (middle + (half * rule.Nodes[k]))), out _));
-        return new PanelInverse(rule, values, panel.Count);
+            values[k] = Math.Exp(expansion.LogIntegrand(middle + (halfWidth * rule.Nodes[k])));
+        return new(rule, values, count);
+    }
+
+    private static double[] Cumulative(Expansion<TKernel> expansion, Panel panel)
+    {
+        var cumulative = new double[(int)panel.Extent];
+        var sum = 0.0;
+        for (var k = 0; k < cumulative.Length; k++)
+            cumulative[k] = sum += Math.Exp(expansion.LogIntegrand(panel.Start + (panel.Step * k)));
+        return cumulative;
     }
 
     // the first index up to which the cumulative sum reaches this part of its total
@@ -102,21 +107,6 @@ internal sealed class SweepInverse<TKernel>
     {
         var index = Array.BinarySearch(cumulative, mass * cumulative[^1]);
         return Math.Min(index >= 0 ? index : ~index, cumulative.Length - 1);
-    }
-
-    private double[] Accumulate()
-    {
-        var below = new double[_panels.Length + 1];
-        for (var i = 0; i < _panels.Length; i++)
-        {
-            var part = _panels[i].Part;
-            below[i + 1] = below[i] + (_partition.Shares[part] * _panels[i].Weight / _partition.Parts[part].Scale);
-        }
-
-        var total = below[^1];
-        for (var i = 0; i < below.Length; i++)
-            below[i] /= total;
-        return below;
     }
 
     // Chen and Asau 1974

@@ -16,10 +16,13 @@ public class InversionTests
         1e-16, 1e-12, 1e-9, 1e-6, 1e-4, .. Enumerable.Range(1, 997).Select(k => k / 998.0), 1 - 1e-4, 1 - 1e-6, 1 - 1e-9, 1 - 1e-12,
     ];
 
+    private static SweepInverse<AtomKernel<TFamily>> Inverse<TFamily>(params double[] theta)
+        where TFamily : IAtomFamily => new(new(default, theta), TFamily.Domain);
+
     private static void CheckInterval<TFamily>(double[] theta, Func<double, double> cdf)
         where TFamily : IAtomFamily
     {
-        var inverse = new SweepInverse<AtomKernel<TFamily>>(default, theta);
+        var inverse = Inverse<TFamily>(theta);
         foreach (var p in s_probabilities)
         {
             var x = inverse.At(p);
@@ -33,7 +36,7 @@ public class InversionTests
     private static void CheckCounts<TFamily>(double[] theta, Func<double, double> cdf)
         where TFamily : IAtomFamily
     {
-        var inverse = new SweepInverse<AtomKernel<TFamily>>(default, theta);
+        var inverse = Inverse<TFamily>(theta);
         foreach (var p in s_probabilities)
         {
             var x = inverse.At(p);
@@ -75,7 +78,7 @@ public class InversionTests
     public void Gamma_all_but_at_zero()
     {
         // P(X < x) is (x/2)^0.01/Γ(1.01) to the leading order
-        var inverse = new SweepInverse<AtomKernel<Gamma>>(default, [-0.99, -2]);
+        var inverse = Inverse<Gamma>([-0.99, -2]);
         foreach (var p in new[] { 0.001, 0.01, 0.1, 0.5 })
         {
             var expected = (Math.Log(p) + Special.LogGamma.Value(1.01)) / 0.01;
@@ -115,7 +118,7 @@ public class InversionTests
     [Fact]
     public void Draws_never_leave_the_support()
     {
-        var inverse = new SweepInverse<AtomKernel<Beta>>(default, [-0.9999, -0.9999]);
+        var inverse = Inverse<Beta>([-0.9999, -0.9999]);
         foreach (var p in s_probabilities)
             Assert.InRange(inverse.At(p), double.Epsilon, Math.BitDecrement(1));
     }
@@ -123,7 +126,7 @@ public class InversionTests
     [Fact]
     public void Places_rise_with_the_probability()
     {
-        var inverse = new SweepInverse<AtomKernel<Quartic>>(default, [0.3, 4, 0.1, -1]);
+        var inverse = Inverse<Quartic>([0.3, 4, 0.1, -1]);
         var draws = s_probabilities.Select(inverse.At).ToArray();
         Assert.Equal(draws.Order(), draws);
         Assert.True(draws[0] < -1 && draws[^1] > 1);
