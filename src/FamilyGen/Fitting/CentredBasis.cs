@@ -1,4 +1,5 @@
 using System;
+using FamilyGen.Kernels;
 
 namespace FamilyGen.Fitting;
 

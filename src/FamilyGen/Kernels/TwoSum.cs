@@ -1,6 +1,6 @@
 using System;
 
-namespace FamilyGen.Fitting;
+namespace FamilyGen.Kernels;
 
 /// <summary>A number of about 106 bits as the unevaluated sum High + Low of two doubles, |Low| ≤ ½ ulp(High).</summary>
 /// <remarks>Dekker 1971; products and remainders by fused multiply-add.</remarks>
