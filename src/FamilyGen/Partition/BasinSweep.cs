@@ -11,6 +11,7 @@ internal sealed class BasinSweep<TKernel>
     // What a panel adds at the end, beside the whole: the rest is smaller still, since the integrand falls from here on.
     private const double Negligible = 1e-18;
 
+    private const double FarthestOffset = 1e300;
     private const int MostPanels = 4000;
     private const double MostTerms = 4e6;
     private const int StallsBeforeNoise = 4;
@@ -94,6 +95,8 @@ internal sealed class BasinSweep<TKernel>
         while (start < end)
         {
             Count();
+            if (start > FarthestOffset)
+                throw new PartitionException("The tail is too heavy: it still counts where doubles end.");
             var size = Math.Min(width, end - start);
             if (start + size == start)
                 break;
@@ -104,7 +107,7 @@ internal sealed class BasinSweep<TKernel>
                 before = excess;
                 if (stalls < StallsBeforeNoise)
                 {
-                    width = size * Growth(excess, 0.7);
+                    width = size * Growth(excess, 0.5);
                     continue;
                 }
             }
@@ -188,7 +191,7 @@ internal sealed class BasinSweep<TKernel>
         var share = panel.Weight * measure / (Total.Weight + panel.Weight * measure);
         for (var i = 0; i < panel.Scale.Length; i++)
         {
-            if (panel.Scale[i] > 0)
+            if (panel.Scale[i] > 0 && panel.Scale[i] < double.PositiveInfinity)
                 share = Math.Max(share, panel.Scale[i] * measure / (Total.Scale[i] + panel.Scale[i] * measure));
         }
 

@@ -54,8 +54,7 @@ internal sealed partial class Expansion<TKernel>
 
     private double LogIntegrand(double offset, Span<double> residual, Span<double> difference)
     {
-        var x = Frame.At(offset, Reference.Integer);
-        var log = Difference(x, residual, difference) + Frame.LogJacobian(x);
+        At(offset, residual, difference, out _, out var log);
         return double.IsNaN(log) ? double.NegativeInfinity : log;
     }
 }

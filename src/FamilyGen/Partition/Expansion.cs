@@ -1,4 +1,5 @@
 using System;
+using System.Threading;
 using FamilyGen.Kernels;
 
 namespace FamilyGen.Partition;
@@ -20,6 +21,7 @@ internal sealed partial class Expansion<TKernel>
     private readonly double[] _remainder;
     private readonly double _tangent;
     private readonly CompensatedSum _level;
+    private FarTail<TKernel>? _far;
 
     public Expansion(TKernel kernel, double[] theta, Frame frame, long integer)
     {
@@ -83,6 +85,29 @@ internal sealed partial class Expansion<TKernel>
     /// <summary>Tⱼ(m), rounded, and log h(m) last.</summary>
     public ReadOnlySpan<double> Values => _value;
 
+    /// <summary>f − f(m) at an offset, with residuals and differences as for a point, the displacement, and the logarithm of
+    /// the integrand, log dx/du included, less its value at m.</summary>
+    public double At(double offset, Span<double> residual, Span<double> difference, out double displacement, out double log)
+    {
+        double exponent;
+        if (FarTail<TKernel>.Reaches(Frame, offset))
+        {
+            exponent = Far.At(offset, difference, out log);
+            displacement = double.PositiveInfinity;
+            return exponent;
+        }
+
+        var x = Frame.At(offset, Reference.Integer);
+        displacement = x.Displacement;
+        exponent = Difference(x, residual, difference);
+        log = exponent + Frame.LogJacobian(x);
+
+        // ∞ − ∞ where a power or the observation itself overflows: beyond every mode
+        if (double.IsNaN(log) && (!(Math.Abs(x.X) < 1e100) || !(Math.Abs(offset) < 300)))
+            log = double.NegativeInfinity;
+        return exponent;
+    }
+
     /// <summary>f(x) − f(m), with the residuals rⱼ(x) and the differences Tⱼ(x) − Tⱼ(m).</summary>
     public double Difference(in Point x, Span<double> residual, Span<double> difference)
     {
@@ -111,6 +136,15 @@ internal sealed partial class Expansion<TKernel>
         return !isCancelled && (size <= LargePart || size <= 2 * Math.Abs(exponent))
             ? exponent
             : PlainDifference(x, exponent, size, residual, difference);
+    }
+
+    private FarTail<TKernel> Far => Volatile.Read(ref _far) ?? PublishFar();
+
+    private FarTail<TKernel> PublishFar()
+    {
+        var far = new FarTail<TKernel>(_kernel.NaturalSet, _theta, this);
+        Volatile.Write(ref _far, far);
+        return far;
     }
 
     private double PlainDifference(in Point x, double exponent, double size, ReadOnlySpan<double> residual, Span<double> difference)

@@ -15,7 +15,7 @@ internal sealed class QuadratureRule
     public const int NodeCount = 20;
 
     /// <summary>The number of highest expansion coefficients by which a rule judges whether it resolves a function.</summary>
-    public const int WitnessCount = 3;
+    public const int WitnessCount = 4;
 
     /// <summary>Runs of fewer integers than this are summed term by term.</summary>
     public const int ShortestRun = 32;
@@ -59,7 +59,7 @@ internal sealed class QuadratureRule
     /// <summary>The weights, with sum one.</summary>
     public double[] Weights { get; }
 
-    /// <summary>Node by node, the weight times the orthonormal polynomials of degree 19, 18 and 17: their sums with a
+    /// <summary>Node by node, the weight times the orthonormal polynomials of degrees 19 to 16: their sums with a
     /// function's values are its highest expansion coefficients.</summary>
     public double[] Witness { get; }
 

@@ -128,9 +128,9 @@ internal sealed class RangePartition<TKernel>
         var expansion = new Expansion<TKernel>(kernel, theta, new Frame(chart, basin.Mode), integer);
         if (expansion.IsUsable || basin.Piece.Step > 0 || !(basin.Lower < basin.Upper))
             return expansion;
-        if (Math.Abs(basin.Mode.LogAboveLower) > FarthestLog)
+        if (chart.Kind is Coordinate.AboveLower or Coordinate.Between && Math.Abs(basin.Mode.LogAboveLower) > FarthestLog)
             return new Expansion<TKernel>(kernel, theta, new Frame(chart, chart.ReferenceNear(Math.CopySign(FarthestLog, basin.Mode.LogAboveLower))), 0);
-        if (Math.Abs(basin.Mode.LogBelowUpper) > FarthestLog)
+        if (chart.Kind is Coordinate.BelowUpper or Coordinate.Between && Math.Abs(basin.Mode.LogBelowUpper) > FarthestLog)
             return new Expansion<TKernel>(kernel, theta, new Frame(chart, chart.ReferenceNear(-Math.CopySign(FarthestLog, basin.Mode.LogBelowUpper))), 0);
         var width = double.IsFinite(basin.Upper - basin.Lower) ? basin.Upper - basin.Lower : 1;
         for (var part = 1e-9; part < 1; part *= 10)
