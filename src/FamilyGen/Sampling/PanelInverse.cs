@@ -62,13 +62,13 @@ internal sealed class PanelInverse
                 break;
             (low, high) = excess > 0 ? (low, x) : (x, high);
             var next = x - (excess / (_rate * density));
+            if (Math.Abs(excess) <= AlmostThere * density)
+                return Math.Clamp(next, low, high);
             if (!(next > low && next < high))
                 next = (low + high) / 2;
             if (next == x)
                 break;
             x = next;
-            if (Math.Abs(excess) <= AlmostThere * density)
-                break;
         }
 
         return x;

@@ -78,7 +78,10 @@ public class ResidualTests
         Assert.Equal(double.PositiveInfinity, Residual.LogGamma(2, -2));
         Assert.Equal(-40000 + 1, Residual.LogAtEnd(-40000));
         Assert.Equal(3, Residual.XLogXAtEnd(3, -40000));
+        Assert.Equal(3, Residual.XLogXAtEnd(3, double.NegativeInfinity));
+        Assert.Equal(double.NegativeInfinity, Residual.LogAtEnd(double.NegativeInfinity));
         Assert.Equal(4, Residual.PowerAtEnd(2, -40000, 2));
+        Assert.Equal(4, Residual.PowerAtEnd(2, double.NegativeInfinity, 2));
         Assert.Equal(double.PositiveInfinity, Residual.PowerAtEnd(2, -40000, -1));
     }
 

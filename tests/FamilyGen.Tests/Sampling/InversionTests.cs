@@ -116,6 +116,16 @@ public class InversionTests
     }
 
     [Fact]
+    public void Joints_between_cells_and_panels_are_met()
+    {
+        // on the unit interval a flat density puts every joint at a multiple of a power of two
+        var inverse = Inverse<Steps>(0);
+        for (var k = 1; k < 3 * 512; k++)
+            foreach (var off in new[] { -1e-12, -1e-15, 0, 1e-15, 1e-12 })
+                Assert.Equal((k / 512.0) + off, inverse.At(((k / 512.0) + off) / 3), 1e-11);
+    }
+
+    [Fact]
     public void Draws_never_leave_the_support()
     {
         var inverse = Inverse<Beta>([-0.9999, -0.9999]);
