@@ -16,8 +16,8 @@ internal sealed record Chance(double Value, double SimulationError, double Low, 
 /// laws, one block of shifts for each pair.</summary>
 internal sealed class LostHours
 {
-    private const int Laws = 400;
-    private const int ShiftsPerLaw = 2500;
+    private const int Laws = 300;
+    private const int ShiftsPerLaw = 1000;
 
     private readonly double[][] _blocks;
 
