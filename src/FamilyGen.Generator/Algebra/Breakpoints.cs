@@ -124,7 +124,8 @@ internal sealed class Breakpoints
     {
         if (Affine.In(function, _scope.Observation.Name) is { } affine)
         {
-            AddPoint(affine.Root(), relation);
+            if (!affine.Slope.IsZero())
+                AddPoint(affine.Root(), relation);
             return;
         }
 
@@ -159,7 +160,7 @@ internal sealed class Breakpoints
     {
         if (_scope.Support.IsLattice || _scope.IsPositive(argument) || _scope.IsNegative(argument))
             return;
-        var roots = Affine.In(argument, _scope.Observation.Name) is { } affine ? new[] { affine.Root() } : Roots.Of(argument, _scope);
+        var roots = Affine.In(argument, _scope.Observation.Name) is { } affine && !affine.Slope.IsZero() ? new[] { affine.Root() } : Roots.Of(argument, _scope);
         foreach (var root in roots ?? Array.Empty<Expression>())
         {
             AddInside(root, _points);

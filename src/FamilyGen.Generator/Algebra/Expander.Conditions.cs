@@ -81,6 +81,8 @@ internal sealed partial class Expander
     // The place where the function changes moves with a parameter.
     private Polynomial Moving(Condition condition, Conditional conditional, Polynomial whenTrue, Polynomial whenFalse)
     {
+        if (Conditions.Comparisons(condition).FirstOrDefault(c => Dependences.Of(c).Ties()) is { } tied)
+            condition = tied;
         var origin = condition.Origin >= 0 ? condition.Origin : conditional.Origin;
         var names = condition.Operands().SelectMany(e => Dependences.Names(e, SymbolKind.Parameter)).Distinct().ToList();
         var text = Rendering.Text(condition);

@@ -14,7 +14,7 @@ internal sealed partial class Expander
         switch (call.Function)
         {
             case Function.Log:
-                return Factored(call.Arguments[0]) is { } term ? LogOf(term, call.Origin) : NegativeInfinity;
+                return Factored(call.Arguments[0]) is { } term ? LogOf(term, call.Origin, call.Arguments[0].Origin) : NegativeInfinity;
             case Function.Cos or Function.Sin:
                 return Wave(call.Function, Expand(call.Arguments[0]), call.Origin);
             case Function.Abs:
@@ -37,11 +37,11 @@ internal sealed partial class Expander
     private static Polynomial Atom(Function function, Expression argument, int origin) =>
         Polynomial.Of(new Call(function, EquatableArray.Of(argument)) { Origin = origin }, origin);
 
-    private Polynomial LogOf(Term term, int origin)
+    // Where the argument is itself a sum, the logarithm is what ties; inside a product or power it is the sum that does.
+    private Polynomial LogOf(Term term, int origin, int argumentOrigin = -1)
     {
         var split = SplitSigns(term);
         var result = Polynomial.Zero;
-        var direct = term.Factors.Count == 1;
         foreach (var factor in split.Positive)
         {
             if (factor.Base is Constant { Text: "e" })
@@ -49,19 +49,21 @@ internal sealed partial class Expander
             else if (factor.Base is Number number)
                 result += LogOf(Term.Of(number.Value), origin) * factor.Exponent;
             else
-                result += Atom(Function.Log, factor.Base, direct || factor.Base.Origin < 0 ? origin : factor.Base.Origin) * factor.Exponent;
+                result += Atom(Function.Log, factor.Base, Place(factor.Base)) * factor.Exponent;
         }
 
         if (split.Rest is { } rest)
         {
             result += rest.Factors.Count == 1 && rest.Coefficient == Rational.One
-                ? Atom(Function.Log, rest.Factors[0].Base, direct || rest.Factors[0].Base.Origin < 0 ? origin : rest.Factors[0].Base.Origin) * rest.Factors[0].Exponent
+                ? Atom(Function.Log, rest.Factors[0].Base, Place(rest.Factors[0].Base)) * rest.Factors[0].Exponent
                 : Atom(Function.Log, Polynomial.Of(rest).ToSortedExpression(), origin);
         }
 
         if (split.Coefficient.Sign < 0)
             return result + Atom(Function.Log, Formula.Of(split.Coefficient), origin);
         return result + LogOfInteger(split.Coefficient.Numerator, origin) - LogOfInteger(split.Coefficient.Denominator, origin);
+
+        int Place(Expression inner) => inner.Origin < 0 || inner.Origin == argumentOrigin ? origin : inner.Origin;
     }
 
     private static Polynomial LogOfInteger(System.Numerics.BigInteger value, int origin) =>

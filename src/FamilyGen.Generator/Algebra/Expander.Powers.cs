@@ -11,7 +11,13 @@ internal sealed partial class Expander
     private Term? Raise(Term? term, Polynomial exponent, int origin)
     {
         if (term is null)
-            return exponent.IsZero ? Term.Of(Rational.One) : null;
+        {
+            // 0⁰ = 1, and a negative power of 0 is infinite.
+            return exponent.IsZero ? Term.Of(Rational.One)
+                : Scope.RangeOf(exponent.ToSortedExpression()).IsNegative ? NegativeInfinity.Terms[0].WithCoefficient(-1)
+                : null;
+        }
+
         if (exponent.AsRational() is { IsInteger: true } n)
             return SingleTerms.Raise(term, n).Terms.FirstOrDefault();
 
@@ -39,11 +45,12 @@ internal sealed partial class Expander
             var root = fraction.Denominator < 60 ? Rationals.Root(value, (int)fraction.Denominator) : null;
             if (root is { } exact && Rationals.Abs(fraction) < 200)
                 return Term.Of(Rationals.Power(exact, (int)fraction.Numerator));
-            return Term.Of(Rational.One, new[]
+            var parts = new[]
             {
                 new Factor(Formula.Of(new Rational(value.Numerator, 1)), exponent, origin),
                 new Factor(Formula.Of(new Rational(value.Denominator, 1)), exponent * -1, origin),
-            })!;
+            };
+            return Term.Of(Rational.One, parts.Where(f => !f.Base.IsOne()))!;
         }
 
         // c^x is e^(x·log c), so that exponentials have one form.
@@ -114,7 +121,7 @@ internal sealed partial class Expander
             {
                 positive.Add(new Factor(new Call(Function.Abs, EquatableArray.Of(factor.Base)) { Origin = factor.Origin }, factor.Exponent, factor.Origin));
             }
-            else if (!factor.Dependence.HasObservation())
+            else if (!factor.Dependence.HasObservation() && (factor.Dependence & Dependence.Natural) == 0)
             {
                 assumed.Add(positive.Count);
                 positive.Add(factor);

@@ -60,7 +60,7 @@ internal static class Normalizer
         if (findings.Count > 0)
             return Refused(findings.ToArray());
 
-        var form = TradeForm.Of(kernel);
+        var form = TradeForm.Of(IndicatorRelations.Apply(kernel, expander.Scope));
         var names = new StatisticNames(declaration.Parameters.Select(p => p.Name).Concat(declaration.Known.Select(k => k.Name)));
         var statistics = new List<Statistic>();
         foreach (var part in form.Parts)
@@ -84,7 +84,8 @@ internal static class Normalizer
         foreach (var name in parameters)
             expander.Scope.Narrow(name, ranges.Lower(name), ranges.Upper(name));
         var logBase = AtomSums.Of(form.LogBase, expander.Scope.Observation, withConstant: false);
-        return Form(declaration, expander, statistics, logBase, EquatableArray<Expression>.Empty, ranges, findings);
+        var inverse = InverseMap.Of(statistics, parameters, expander).ToEquatableArray();
+        return Form(declaration, expander, statistics, logBase, inverse, ranges, findings);
     }
 
     private static NormalFormResult Form(

@@ -28,7 +28,7 @@ internal sealed class Polynomial
     public bool IsSingleTerm => Terms.Count == 1;
 
     /// <summary>Whether the sum contains −∞, which swallows all that is finite beside it.</summary>
-    public bool IsNegativeInfinity => Terms.Any(t => t.Factors.Any(f => f.Base.IsNegativeInfinity()));
+    public bool IsNegativeInfinity => Terms.Any(t => t.Coefficient.Sign > 0 && t.Factors.Any(f => f.Base.IsNegativeInfinity()));
 
     public static Polynomial Of(Rational value) => value.IsZero ? Zero : new(new[] { Term.Of(value) });
 

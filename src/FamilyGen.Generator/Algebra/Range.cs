@@ -76,7 +76,7 @@ internal readonly record struct Range(double Lower, bool LowerOpen, double Upper
             var positive = Power(-n);
             if (positive.IsPositive || positive.IsNegative)
                 return Checked(1 / positive.Upper, positive.UpperOpen, 1 / positive.Lower, positive.LowerOpen || positive.Lower == 0);
-            return Line;
+            return positive.IsNonNegative ? Positive : Line;
         }
 
         return n % 2 == 0 ? Abs().Map(v => Math.Pow(v, n)) : Map(v => Math.Pow(v, n));

@@ -78,7 +78,7 @@ internal static class Rendering
         switch (expression)
         {
             case Number number:
-                return Parenthesized(Number(number.Value), (number.Value.Sign < 0 && place > InSum) || (!number.Value.IsInteger && place >= InPower));
+                return Parenthesized(Number(number.Value), (number.Value.Sign < 0 && place > InSum) || (place >= InPower && Number(number.Value).IndexOf('/') >= 0));
             case Constant constant:
                 return constant.Value == Math.PI ? "π" : constant.Value == Math.E ? "e" : Parenthesized(Number(constant.Value), constant.Value < 0 && place > InSum);
             case Symbol symbol:
