@@ -13,6 +13,7 @@ namespace FamilyGen.Fitting;
 /// <param name="Iterations">The steps taken, those on tried faces included.</param>
 /// <param name="IsEndless">Whether the search went on, without a sign of an end, until it was stopped.</param>
 /// <param name="Reason">Why an evaluation failed, if one did.</param>
+/// <param name="Tie">A relation between the statistics that holds on the whole support, if there is one.</param>
 internal sealed record SearchOutcome<TKernel>(
     ModelPoint<TKernel>? Maximum,
     Face Face,
@@ -20,7 +21,8 @@ internal sealed record SearchOutcome<TKernel>(
     IReadOnlyList<double[]> Path,
     int Iterations,
     bool IsEndless,
-    string? Reason)
+    string? Reason,
+    string? Tie = null)
     where TKernel : struct, IKernel;
 
 /// <summary>Newton's method for the likelihood in the natural parameters, where it is concave, so that the one maximum is
@@ -50,8 +52,10 @@ internal sealed class ConcaveSearch<TKernel>(StatisticSums<TKernel> sums)
     public SearchOutcome<TKernel> Run()
     {
         var face = Face.Whole(sums.Kernel.NaturalSet, TKernel.Count);
+        if (Concentration.Path(sums) is { } path)
+            return new(null, face, [], path, path.Count, true, null);
         var start = StartingPoints<TKernel>.Best(sums, face, _unit, out var reason);
-        return start is null ? new(null, face, [], [], 0, false, reason) : Climb(start, face);
+        return start is null ? new(null, face, [], [], 0, false, reason, AffineDependence.Find(sums)) : Climb(start, face);
     }
 
     private SearchOutcome<TKernel> Climb(ModelPoint<TKernel> point, Face face)

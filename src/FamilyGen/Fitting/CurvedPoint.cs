@@ -89,6 +89,20 @@ internal sealed class CurvedPoint<TKernel>
         return Cholesky.TryFactor(observed)?.Inverse();
     }
 
+    /// <summary>A parameter along which the likelihood neither rises nor bends though the law would change: in units in which
+    /// the expected information is 1, slope and observed information are 0 to within rounding. Null when there is none.</summary>
+    public int? FlatParameter()
+    {
+        const double Rounding = 1e-8;
+        for (var a = 0; a < Gradient.Length; a++)
+        {
+            if (Math.Abs(Hessian[a, a]) <= Rounding * Information[a, a] && Math.Abs(Gradient[a]) <= Rounding * Math.Sqrt(Information[a, a]))
+                return a;
+        }
+
+        return null;
+    }
+
     private static double Dot(double[] a, double[] b)
     {
         double sum = 0;

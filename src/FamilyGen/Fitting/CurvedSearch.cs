@@ -9,18 +9,23 @@ namespace FamilyGen.Fitting;
 /// <param name="IsMaximum">Whether the gradient vanishes there and the curvature is that of a maximum.</param>
 /// <param name="Path">The trade parameters that were gone through.</param>
 /// <param name="Iterations">The steps taken.</param>
-internal sealed record CurvedClimb<TKernel>(CurvedPoint<TKernel> End, bool IsMaximum, IReadOnlyList<double[]> Path, int Iterations)
+/// <param name="Flat">A parameter about which the data say nothing, if there is one.</param>
+internal sealed record CurvedClimb<TKernel>(CurvedPoint<TKernel> End, bool IsMaximum, IReadOnlyList<double[]> Path, int Iterations, int? Flat)
     where TKernel : struct, ITradeKernel;
 
 /// <summary>Trust-region Newton for a likelihood in trade parameters that need not be concave.</summary>
 internal sealed class CurvedSearch<TKernel>(StatisticSums<TKernel> sums)
     where TKernel : struct, ITradeKernel
 {
-    private const int MaximalSteps = 200;
+    private const int MaximalSteps = 80;
+    private const int StepsThatProveDivergence = 25;
     private const int RefinedStarts = 6;
     private const int SurveyedStarts = 40;
     private const double Converged = 1e-13;
     private const double Quadratic = 1e-5;
+
+    // A region this small, in standard deviations of one unit of weight, is left by no step that matters.
+    private const double SmallestRadius = 1e-5;
 
     private readonly ParameterChart _chart = ParameterChart.Of(sums.Kernel);
 
@@ -88,22 +93,28 @@ internal sealed class CurvedSearch<TKernel>(StatisticSums<TKernel> sums)
         var previous = double.PositiveInfinity;
         double[]? lastStep = null;
         var lastBend = double.NaN;
-        for (var steps = 0; steps < MaximalSteps; steps++)
+        var unsteady = 0;
+        for (var steps = 0; steps < MaximalSteps && unsteady < StepsThatProveDivergence; steps++)
         {
             var (gradient, hessian, unit) = InChart(y, point);
             var decrement = Decrement(gradient, hessian);
 
             // Along a road to infinity the decrement vanishes too, but the curvature goes on changing from step to step.
             var isSteady = lastStep is not null && Bend(hessian, lastStep) / lastBend is > 0.7 and < 1.4;
+            unsteady = isSteady ? 0 : unsteady + 1;
             if (isSteady && decrement < Quadratic && (decrement <= Converged || decrement > previous / 4))
-                return new(point, true, path, steps);
+            {
+                var flat = point.FlatParameter();
+                return new(point, flat is null, path, steps, flat);
+            }
+
             previous = decrement;
 
             var moved = false;
-            for (var trial = 0; trial < 40 && !moved; trial++)
+            while (!moved && radius > SmallestRadius)
             {
                 if (TrustRegion.Step(gradient, hessian, unit, radius) is not var (step, rise, isOnRim))
-                    return new(point, false, path, steps);
+                    return new(point, false, path, steps, null);
                 var next = new double[y.Length];
                 for (var i = 0; i < y.Length; i++)
                     next[i] = y[i] + step[i];
@@ -122,10 +133,10 @@ internal sealed class CurvedSearch<TKernel>(StatisticSums<TKernel> sums)
             }
 
             if (!moved)
-                return new(point, isSteady && decrement < Quadratic, path, steps);
+                return new(point, isSteady && decrement < Quadratic && point.FlatParameter() is null, path, steps, point.FlatParameter());
         }
 
-        return new(point, false, path, MaximalSteps);
+        return new(point, false, path, path.Count - 1, null);
     }
 
     /// <summary>A rise of at least a part of what the model promised, or one too small to be told from rounding.</summary>

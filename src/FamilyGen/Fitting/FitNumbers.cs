@@ -26,8 +26,8 @@ internal sealed record FitNumbers
     /// <summary>What a reader of the table must know beyond the status, or nothing.</summary>
     public ImmutableArray<string> Notes { get; init; } = [];
 
-    /// <summary>Mean and 95 % quantile of the fitted law, computed when asked.</summary>
-    public required Lazy<(double Mean, double Quantile)> Landmarks { get; init; }
+    /// <summary>Mean, standard deviation and 95 % quantile of the fitted law, computed when asked.</summary>
+    public required Lazy<(double Mean, double Deviation, double Quantile)> Landmarks { get; init; }
 }
 
 /// <summary>Parameters with their names and covariance; NaN marks what has no standard error.</summary>

@@ -8,19 +8,25 @@ namespace FamilyGen.Fitting;
 /// <summary>The table by which a fit presents itself.</summary>
 internal static class FitTable
 {
-    private const int NumberWidth = 13;
+    private const int NumberWidth = 16;
+    private const int FewestDigits = 6;
+    private const int MostDigits = 15;
 
     public static string Write(string family, FitNumbers numbers, double aic, double bic)
     {
-        var rows = new List<(string Label, double Value, double Error)>();
+        var rows = new List<(string Label, string Value, string Error)>();
         for (var i = 0; i < numbers.Parameters.Names.Length; i++)
-            rows.Add((numbers.Parameters.Names[i], numbers.Parameters.Values[i], numbers.Parameters.StandardErrors[i]));
-        var parameters = rows.Count;
-        rows.Add(("mean", numbers.Landmarks.Value.Mean, 0));
-        rows.Add(("95 % quantile", numbers.Landmarks.Value.Quantile, 0));
-        rows.Add(("log-likelihood", numbers.LogLikelihood, 0));
-        rows.Add(("AIC", aic, 0));
-        rows.Add(("BIC", bic, 0));
+        {
+            var (value, error) = (numbers.Parameters.Values[i], numbers.Parameters.StandardErrors[i]);
+            rows.Add((numbers.Parameters.Names[i], Number(value, error / 100), double.IsNaN(error) ? "held" : Number(error)));
+        }
+
+        var law = numbers.Landmarks.Value;
+        rows.Add(("mean", Number(law.Mean, law.Deviation / 1000), ""));
+        rows.Add(("95 % quantile", Number(law.Quantile, law.Deviation / 1000), ""));
+        rows.Add(("log-likelihood", Number(numbers.LogLikelihood, 1e-3), ""));
+        rows.Add(("AIC", Number(aic, 1e-3), ""));
+        rows.Add(("BIC", Number(bic, 1e-3), ""));
 
         var width = 0;
         foreach (var row in rows)
@@ -30,11 +36,11 @@ internal static class FitTable
         if (numbers.TotalWeight != numbers.Observations)
             text.Append(" of total weight ").Append(Number(numbers.TotalWeight));
         text.Append('\n').Append(' ', width).Append("estimate".PadLeft(NumberWidth)).Append("std. error".PadLeft(NumberWidth)).Append('\n');
-        for (var i = 0; i < rows.Count; i++)
+        foreach (var (label, value, error) in rows)
         {
-            text.Append(rows[i].Label.PadRight(width)).Append(Number(rows[i].Value).PadLeft(NumberWidth));
-            if (i < parameters)
-                text.Append((double.IsNaN(rows[i].Error) ? "held" : Number(rows[i].Error)).PadLeft(NumberWidth));
+            text.Append(label.PadRight(width)).Append(value.PadLeft(NumberWidth));
+            if (error != "")
+                text.Append(error.PadLeft(NumberWidth));
             text.Append('\n');
         }
 
@@ -61,7 +67,13 @@ internal static class FitTable
         return $"{kind} ({numbers.Iterations.ToString(CultureInfo.InvariantCulture)} iterations)";
     }
 
-    private static string Number(double value) => double.IsInfinity(value)
-        ? (value > 0 ? "∞" : "−∞")
-        : value.ToString("G6", CultureInfo.InvariantCulture);
+    /// <summary>A number with digits down to the size that matters, six at least.</summary>
+    private static string Number(double value, double smallest = double.NaN)
+    {
+        if (double.IsInfinity(value))
+            return value > 0 ? "∞" : "−∞";
+        var digits = Math.Ceiling(Math.Log10(Math.Abs(value) / smallest));
+        digits = double.IsNaN(digits) ? FewestDigits : Math.Clamp(digits, FewestDigits, MostDigits);
+        return value.ToString("G" + digits.ToString(CultureInfo.InvariantCulture), CultureInfo.InvariantCulture);
+    }
 }

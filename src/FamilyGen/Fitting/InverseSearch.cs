@@ -27,6 +27,7 @@ internal static class InverseSearch
             if (distance > Solved)
                 continue;
             chart.Parameters(y).CopyTo(parameters);
+            SettleAtZero(kernel, theta, unit, parameters, distance);
             return TradeParameters.AreInRange(kernel, parameters);
         }
 
@@ -71,6 +72,22 @@ internal static class InverseSearch
         }
 
         return y;
+    }
+
+    /// <summary>Replaces parameters that are all but 0 by 0 where η is then no farther from θ: a maximum on the boundary of the
+    /// parameter set needs it exactly.</summary>
+    private static void SettleAtZero<TKernel>(TKernel kernel, ReadOnlySpan<double> theta, ReadOnlySpan<double> unit, Span<double> parameters, double distance)
+        where TKernel : struct, ITradeKernel
+    {
+        for (var i = 0; i < parameters.Length; i++)
+        {
+            var before = parameters[i];
+            if (!(Math.Abs(before) < 1e-9))
+                continue;
+            parameters[i] = 0;
+            if (!TradeParameters.AreInRange(kernel, parameters) || !(Misfit(NaturalMap.At(kernel, parameters), theta, unit) <= distance))
+                parameters[i] = before;
+        }
     }
 
     private static NaturalMap Map<TKernel>(TKernel kernel, ParameterChart chart, double[] y)

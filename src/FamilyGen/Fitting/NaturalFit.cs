@@ -19,7 +19,9 @@ internal static class NaturalFit
         var outcome = new ConcaveSearch<TKernel>(sums).Run();
         if (outcome.Maximum is not null)
             return Numbers(sums, outcome);
-        account = NoMaximum.Account(sums, family, SearchPath.InNatural<TKernel>(outcome.Path, outcome.Reason));
+        account = outcome.Tie is { } tie
+            ? NoMaximum.AccountOfTie(sums, family, tie)
+            : NoMaximum.Account(sums, family, SearchPath.InNatural<TKernel>(outcome.Path, outcome.Reason));
         return null;
     }
 
@@ -53,17 +55,17 @@ internal static class NaturalFit
         };
     }
 
-    /// <summary>Mean and 95 % quantile of a law; NaN where the engine cannot give them.</summary>
-    public static Lazy<(double Mean, double Quantile)> Landmarks<TKernel>(Distribution<TKernel> law)
+    /// <summary>Mean, standard deviation and 95 % quantile of a law; NaN where the engine cannot give them.</summary>
+    public static Lazy<(double Mean, double Deviation, double Quantile)> Landmarks<TKernel>(Distribution<TKernel> law)
         where TKernel : struct, IKernel => new(() =>
         {
             try
             {
-                return (law.Mean, double.NaN);
+                return (law.Mean, Math.Sqrt(law.Variance), law.Quantile(0.95));
             }
             catch (PartitionException)
             {
-                return (double.NaN, double.NaN);
+                return (double.NaN, double.NaN, double.NaN);
             }
         });
 

@@ -18,6 +18,11 @@ internal static class NoMaximum
         return sums.TotalWeight > 0 ? null : $"{family} cannot be fitted: the weights of all {Number(sums.Count)} observations are 0.";
     }
 
+    /// <summary>The account of statistics that are tied to each other.</summary>
+    public static string AccountOfTie<TKernel>(StatisticSums<TKernel> sums, string family, string relation)
+        where TKernel : struct, IKernel =>
+        $"{family} cannot be fitted: {relation}. Leave one of these statistics out, or choose other known values where they bring it about ({sums.Kernel}).";
+
     /// <summary>The account of a search in the natural parameters that found no maximum.</summary>
     public static string Account<TKernel>(StatisticSums<TKernel> sums, string family, SearchPath path)
         where TKernel : struct, IKernel => Account(sums, family, path, path.Direction(Extremes(sums)) ?? path.Direction());
@@ -34,6 +39,7 @@ internal static class NoMaximum
         var cause = Cause(sums);
         if (direction is not null)
         {
+            cause ??= FewValues(sums);
             cause ??= "The means of the statistics lie on the edge of what the laws of the family can have";
             return $"{family} has no maximum-likelihood fit to these data: the likelihood never stops rising as {direction}. {cause}. {Advice}.";
         }
@@ -72,6 +78,14 @@ internal static class NoMaximum
             }
         }
 
+        return null;
+    }
+
+    /// <summary>The observations' values where they are too few; null where they are not.</summary>
+    private static string? FewValues<TKernel>(StatisticSums<TKernel> sums)
+        where TKernel : struct, IKernel
+    {
+        var distinct = sums.Distinct.Values;
         if (distinct.Length == 0 || distinct.Length > TKernel.Count + 1)
             return null;
         var values = new string[distinct.Length];

@@ -66,7 +66,7 @@ internal static class StartingPoints<TKernel>
 
     /// <summary>Parameters for which the exponent has its top at the data's mean and there the curvature of a normal law with
     /// the data's spread, the smallest such parameters when there are several; null where the slopes do not tell.</summary>
-    private static double[]? LikeNormal(TKernel kernel, double mean, double deviation)
+    public static double[]? LikeNormal(TKernel kernel, double mean, double deviation)
     {
         var domain = kernel.Domain;
         if (!(deviation > 0))

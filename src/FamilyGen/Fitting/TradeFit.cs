@@ -18,6 +18,12 @@ internal static class TradeFit
         if (account is not null)
             return null;
         var outcome = new ConcaveSearch<TKernel>(sums).Run();
+        if (outcome.Tie is { } tie)
+        {
+            account = NoMaximum.AccountOfTie(sums, family, tie);
+            return null;
+        }
+
         if (TKernel.ParameterNames.Length < TKernel.Count)
             return Curved(sums, family, outcome, isWhole: false, out account);
 
@@ -124,6 +130,13 @@ internal static class TradeFit
         var unreached = isWhole
             ? $" The maximum over all laws with these statistics, {Natural<TKernel>(outcome.Maximum!.Theta)}, is out of the reach of the parameters as they are declared."
             : "";
+        if (climbs.Find(climb => climb.Flat is not null) is { Flat: { } flat })
+        {
+            account = $"{family} has no maximum-likelihood fit to these data: the likelihood does not change with '{TKernel.ParameterNames[flat]}', "
+                + "about which the observations say nothing. Data that reach where it acts may determine it; else make it a known value.";
+            return null;
+        }
+
         IReadOnlyList<double[]> path = climbs.Count == 0 ? [] : climbs[0].Path;
         account = NoMaximum.Account(
             sums,

@@ -133,13 +133,15 @@ internal readonly struct BearingHours : ITradeFamily
         where TNumber : struct, IArithmetic<TNumber> =>
         (theta[0], theta[1], theta[2]) = (TNumber.Log(parameters[0]) - TNumber.Log(parameters[1]), -parameters[0], -parameters[1]);
 
+    /// <summary>A function with one slope below the end of the run-in and another above it.</summary>
     private sealed class Ramp(Func<double, double> value, Func<double, double> slope) : Atom
     {
         public override double Value(in Point x) => value(x.X);
 
         public override double Slope(in Point m) => slope(m.X);
 
-        public override double Residual(in Point m, in Point x) => value(x.X) - value(m.X) - (slope(m.X) * x.Displacement);
+        public override double Residual(in Point m, in Point x) =>
+            slope(m.X) == slope(x.X) ? 0 : value(x.X) - value(m.X) - (slope(m.X) * x.Displacement);
 
         public override TNumber Derivative<TNumber>(TNumber x, in Point piece) => slope(piece.X);
     }
