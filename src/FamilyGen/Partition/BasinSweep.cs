@@ -14,7 +14,6 @@ internal sealed class BasinSweep<TKernel>
     private const double FarthestOffset = 1e300;
     private const int MostPanels = 4000;
     private const double MostTerms = 4e6;
-    private const int StallsBeforeNoise = 4;
 
     // An unread function may leave long gaps; a sum over it ends after this many runs without a contribution.
     private const int QuietRunsTermByTerm = 16;
@@ -90,8 +89,6 @@ internal sealed class BasinSweep<TKernel>
         var start = 0.0;
         var startLog = origin == 0 ? 0 : _panel.Log(origin, out _);
         var width = 2 * FoldDistance(_panel, origin, Math.Min(1, end / 2), end, direction);
-        double before = double.PositiveInfinity;
-        var stalls = 0;
         while (start < end)
         {
             Count();
@@ -103,13 +100,8 @@ internal sealed class BasinSweep<TKernel>
             var excess = _panel.Apply(QuadratureRule.Interval, origin + direction * (start + size / 2), direction * size / 2, size, startLog, Total);
             if (excess > 1)
             {
-                stalls = excess > 0.75 * before && !double.IsInfinity(excess) ? stalls + 1 : 0;
-                before = excess;
-                if (stalls < StallsBeforeNoise)
-                {
-                    width = size * Growth(excess, 0.5);
-                    continue;
-                }
+                width = size * Growth(excess, 0.5);
+                continue;
             }
 
             var share = Share(size);
@@ -118,8 +110,6 @@ internal sealed class BasinSweep<TKernel>
             start += size;
             startLog = _panel.LastLog;
             width = size * Growth(excess, 4);
-            before = double.PositiveInfinity;
-            stalls = 0;
             if (share <= Negligible)
                 break;
         }

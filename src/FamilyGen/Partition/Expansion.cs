@@ -14,6 +14,9 @@ internal sealed partial class Expansion<TKernel>
     // Parts beyond this size, in units of the exponent, make the plain difference worth a look.
     private const double LargePart = 256;
 
+    private const double ValueNoise = 4e-16;
+    private const double UnreadNoise = 1e-12;
+
     private readonly TKernel _kernel;
     private readonly double[] _theta;
     private readonly double[] _slope;
@@ -35,6 +38,7 @@ internal sealed partial class Expansion<TKernel>
         _kernel.Evaluate(m, _value, _remainder);
         _kernel.Slopes(m, _slope);
         CompensatedSum tangent = default, level = default;
+        var noise = kernel.Domain.IsOpaque ? UnreadNoise : 0;
         for (var j = 0; j <= count; j++)
         {
             var factor = j < count ? theta[j] : 1;
@@ -42,9 +46,12 @@ internal sealed partial class Expansion<TKernel>
                 continue;
             tangent.AddProduct(factor, _slope[j]);
             level.AddProduct(factor, _value[j]);
+            if (_slope[j] == 0)
+                noise += ValueNoise * Math.Abs(factor * _value[j]);
             level.AddProduct(factor, _remainder[j]);
         }
 
+        Noise = noise;
         _tangent = tangent.Value;
         _level = level;
     }
@@ -54,6 +61,10 @@ internal sealed partial class Expansion<TKernel>
 
     /// <summary>The reference point m.</summary>
     public Point Reference { get; }
+
+    /// <summary>The rounding that may show in the exponent: functions without a tangent are plain differences of values,
+    /// and those that could not be read may carry more.</summary>
+    public double Noise { get; }
 
     /// <summary>f(m).</summary>
     public CompensatedSum Level => _level;

@@ -153,13 +153,15 @@ internal sealed class PanelSum<TKernel>
         last *= measure / scale;
         before *= measure / scale;
         var excess = Math.Max(last, before) / Tolerance;
+        if (Math.Max(last, before) <= _expansion.Noise)
+            return 0;
         if (excess > 1 || last <= Rounding)
             return excess;
 
         // what the rule leaves out starts another twenty degrees on; a fall from degree 17 to 19 by decay is one by decay⁶
         // from 19 to 40 if it is that of a power of the degree
         var decay = Math.Min(1, last / before);
-        var beyond = last * Math.Pow(decay, 6) / Neglected;
-        return beyond <= 1 ? excess : Math.Max(excess, Math.Sqrt(beyond));
+        var beyond = last * decay * decay * decay * decay * decay * decay / Neglected;
+        return beyond <= 1 ? excess : Math.Max(excess, beyond);
     }
 }

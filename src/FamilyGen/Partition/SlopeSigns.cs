@@ -12,7 +12,7 @@ internal readonly record struct SignedRange(double From, double To, int Sign);
 /// whatever it does there, so that no mode of consequence is missed.</summary>
 internal static class SlopeSigns
 {
-    private const int Budget = 4000;
+    private const int Budget = 1500;
     private const double FlatVariation = 0.5;
     private const int SamplesWhereUndecided = 32;
 

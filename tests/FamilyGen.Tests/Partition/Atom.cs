@@ -132,6 +132,19 @@ internal sealed class LogGammaOf(double factor, double shift) : Atom
     public override TNumber Derivative<TNumber>(TNumber x, in Point piece) => (TNumber)factor * TNumber.Digamma(x + shift);
 }
 
+/// <summary>log Γ(x + first + shift) − log Γ(x + first).</summary>
+internal sealed class LogGammaRatioOf(double first, double shift) : Atom
+{
+    public override double Value(in Point x) => LogGammaRatio.Value(x.X + first, shift);
+
+    public override double Slope(in Point m) => LogGammaRatio.Derivative(m.X + first, shift);
+
+    public override double Residual(in Point m, in Point x) => FamilyGen.Kernels.Residual.LogGammaRatio(m.X + first, shift, x.Displacement);
+
+    public override TNumber Derivative<TNumber>(TNumber x, in Point piece) =>
+        TNumber.Digamma(x + (first + shift)) - TNumber.Digamma(x + first);
+}
+
 /// <summary>A condition on the observation: 1 where it holds.</summary>
 internal sealed class Indicator(Func<Point, bool> holds) : Atom
 {

@@ -46,7 +46,7 @@ internal readonly struct NegativeBinomial : IAtomFamily
 {
     public static Atom[] Statistics => [new Monomial(1)];
 
-    public static Atom LogBase => new SumOf(-Special.LogGamma.Value(2.5), (1, new LogGammaOf(1, 2.5)), (-1, new LogGammaOf(1, 1)));
+    public static Atom LogBase => new SumOf(-Special.LogGamma.Value(2.5), (1, new LogGammaRatioOf(1, 1.5)));
 
     public static Domain Domain => Parts.Counts(0);
 
