@@ -1,4 +1,5 @@
 using System;
+using FamilyGen.Special;
 
 namespace FamilyGen.Kernels;
 
@@ -127,6 +128,16 @@ public readonly record struct Bounds : IArithmetic<Bounds>
     public static Bounds Digamma(Bounds a) => a.Upper <= 0
         ? Unknown
         : Outward(Special.Digamma.Value(Math.Max(0, a.Lower)), Special.Digamma.Value(a.Upper), GammaError);
+
+    /// <inheritdoc/>
+    public static Bounds DigammaDifference(Bounds a, double shift)
+    {
+        // monotone: its derivative ψ′(a + shift) − ψ′(a) has one sign
+        if (!(a.Lower > 0 && a.Lower + shift > 0))
+            return Digamma(a + shift) - Digamma(a);
+        var (p, q) = (LogGammaRatio.Derivative(a.Lower, shift), double.IsInfinity(a.Upper) ? 0 : LogGammaRatio.Derivative(a.Upper, shift));
+        return Outward(Math.Min(p, q), Math.Max(p, q), GammaError);
+    }
 
     // 0·∞ is 0: the numbers of a range are finite
     private static double Product(double a, double b) => a == 0 || b == 0 ? 0 : a * b;

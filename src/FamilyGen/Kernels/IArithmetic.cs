@@ -51,6 +51,9 @@ public interface IArithmetic<TSelf>
     /// <summary>ψ(a) = d/da log Γ(a), a &gt; 0.</summary>
     static abstract TSelf Digamma(TSelf a);
 
+    /// <summary>ψ(a + shift) − ψ(a), the derivative of log Γ(a + shift) − log Γ(a); a and a + shift &gt; 0.</summary>
+    static virtual TSelf DigammaDifference(TSelf a, double shift) => TSelf.Digamma(a + shift) - TSelf.Digamma(a);
+
     /// <summary>An unknown value: NaN, or the whole line.</summary>
     static abstract TSelf Unknown { get; }
 }

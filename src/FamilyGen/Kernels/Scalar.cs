@@ -54,4 +54,7 @@ public readonly record struct Scalar(double Value) : IArithmetic<Scalar>
 
     /// <inheritdoc/>
     public static Scalar Digamma(Scalar a) => Special.Digamma.Value(a.Value);
+
+    /// <inheritdoc/>
+    public static Scalar DigammaDifference(Scalar a, double shift) => LogGammaRatio.Derivative(a.Value, shift);
 }

@@ -115,6 +115,8 @@ internal readonly struct ScaleFree : IArithmetic<ScaleFree>
 
     public static ScaleFree Digamma(ScaleFree a) => a.With(Bounds.Digamma(a.Range));
 
+    public static ScaleFree DigammaDifference(ScaleFree a, double shift) => a.With(Bounds.DigammaDifference(a.Range, shift));
+
     private static bool IsZero(ScaleFree a) => a._offset == 0 && a._factor.Lower == 0 && a._factor.Upper == 0;
 
     private static (Bounds Y, bool HasY) Common(ScaleFree a, ScaleFree b) => (a._hasY ? a._y : b._y, a._hasY || b._hasY);

@@ -87,13 +87,14 @@ internal static class SlopeSigns
         where TKernel : struct, IKernel
     {
         var last = from;
+        var before = field.Slope(from);
         for (var i = 1; i <= SamplesWhereUndecided; i++)
         {
             var next = i == SamplesWhereUndecided ? to : from + (to - from) * i / SamplesWhereUndecided;
-            var sign = Math.Sign(field.Slope(last + (next - last) / 2) switch { double.NaN => 0, var slope => slope });
-            if (sign != 0)
-                Join(signs, last, next, sign);
-            last = next;
+            var slope = field.Slope(next);
+            if (before * slope > 0)
+                Join(signs, last, next, slope > 0 ? 1 : -1);
+            (last, before) = (next, slope);
         }
     }
 

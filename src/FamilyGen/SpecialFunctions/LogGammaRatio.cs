@@ -6,7 +6,7 @@ namespace FamilyGen.Special;
 /// negative binomial coefficient is made of.</summary>
 /// <remarks>From 10 on, Stirling's series of the two, term by term: shift·log x + x(log(1 + z) − z) +
 /// (shift − ½)log(1 + z) + the difference of the tails, z = shift/x; below, both arguments are moved up by
-/// Γ(x + 1) = xΓ(x). Where the shift outgrows x the plain difference loses nothing and is taken.</remarks>
+/// Γ(x + 1) = xΓ(x). Where a negative shift takes most of x the plain difference loses nothing and is taken.</remarks>
 public static class LogGammaRatio
 {
     private const double StirlingFrom = 10;
@@ -20,7 +20,7 @@ public static class LogGammaRatio
     /// <summary>log Γ(x + shift) − log Γ(x).</summary>
     public static double Value(double x, double shift)
     {
-        if (!(Math.Abs(shift) < x))
+        if (!(shift > -0.5 * x))
             return LogGamma.Value(x + shift) - LogGamma.Value(x);
         var moved = 0.0;
         while (x < StirlingFrom || x + shift < StirlingFrom)
@@ -31,7 +31,7 @@ public static class LogGammaRatio
     /// <summary>ψ(x + shift) − ψ(x), the derivative with respect to x.</summary>
     public static double Derivative(double x, double shift)
     {
-        if (!(Math.Abs(shift) < x))
+        if (!(shift > -0.5 * x))
             return Digamma.Value(x + shift) - Digamma.Value(x);
         var moved = 0.0;
         for (; x < StirlingFrom || x + shift < StirlingFrom; x++)

@@ -142,7 +142,7 @@ internal sealed class LogGammaRatioOf(double first, double shift) : Atom
     public override double Residual(in Point m, in Point x) => FamilyGen.Kernels.Residual.LogGammaRatio(m.X + first, shift, x.Displacement);
 
     public override TNumber Derivative<TNumber>(TNumber x, in Point piece) =>
-        TNumber.Digamma(x + (first + shift)) - TNumber.Digamma(x + first);
+        TNumber.DigammaDifference(x + first, shift);
 }
 
 /// <summary>A condition on the observation: 1 where it holds.</summary>
