@@ -94,13 +94,16 @@ internal readonly ref struct ModeSearch<TKernel>
 
     private Point ModePoint(Piece piece, double mode)
     {
-        var (pieceFrom, pieceTo) = (_chart.CoordinateOf(piece.Lower), _chart.CoordinateOf(piece.Upper));
-        if (mode <= pieceFrom)
-            return _chart.Reference(piece.Lower);
-        if (mode >= pieceTo)
-            return _chart.Reference(piece.Upper);
+        // A breakpoint itself may have the functions of either neighbour: the reference point lies just inside.
+        var breakpoints = _kernel.Domain.Breakpoints;
+        var first = breakpoints.Contains(piece.Lower) ? Math.BitIncrement(piece.Lower) : piece.Lower;
+        var last = breakpoints.Contains(piece.Upper) ? Math.BitDecrement(piece.Upper) : piece.Upper;
+        if (mode <= _chart.CoordinateOf(first))
+            return _chart.Reference(first);
+        if (mode >= _chart.CoordinateOf(last))
+            return _chart.Reference(last);
         var m = _chart.ReferenceNear(mode);
-        return m.X < piece.Lower ? _chart.Reference(piece.Lower) : m.X > piece.Upper ? _chart.Reference(piece.Upper) : m;
+        return m.X < first ? _chart.Reference(first) : m.X > last ? _chart.Reference(last) : m;
     }
 
     // The member of the piece's residue class at or below x.
