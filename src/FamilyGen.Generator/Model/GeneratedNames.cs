@@ -33,8 +33,8 @@ internal static class GeneratedNames
     public static bool IsReservedInKernel(string name) => s_ofKernel.Contains(name);
 
     /// <summary>The property that a trade parameter or known value becomes: shape → Shape.</summary>
-    public static string PropertyOf(string parameter) => char.ToUpperInvariant(parameter[0]) + parameter.Substring(1);
+    public static string PropertyOf(string parameter) => parameter.Length == 0 ? "" : char.ToUpperInvariant(parameter[0]) + parameter.Substring(1);
 
     /// <summary>The natural parameter that a statistic's name stands for: LogUnits → logUnits.</summary>
-    public static string ParameterOf(string statistic) => char.ToLowerInvariant(statistic[0]) + statistic.Substring(1);
+    public static string ParameterOf(string statistic) => statistic.Length == 0 ? "" : char.ToLowerInvariant(statistic[0]) + statistic.Substring(1);
 }

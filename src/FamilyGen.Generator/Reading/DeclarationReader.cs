@@ -86,6 +86,9 @@ internal sealed class DeclarationReader(ReadingSession session, DeclaredMembers 
         var value = canRead ? _reader.ReadMember(member.Symbol, scope) : null;
         if (!member.Symbol.IsStatic && session.DependencyCount == before && session.IsReadable)
             session.Refuse(session.Mark(member.Symbol), ShapeFault.NotStatic(member.Symbol.Name));
-        return value;
+        if (value is null || FormulaSize.IsManageable(value))
+            return value;
+        session.Refuse(session.Mark(member.Symbol), ShapeFault.TooLarge());
+        return null;
     }
 }

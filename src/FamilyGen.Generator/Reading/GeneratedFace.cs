@@ -46,7 +46,7 @@ internal static class GeneratedFace
 
         foreach (var name in declaration.Parameters.SelectMany(p => new[] { GeneratedNames.PropertyOf(p.Name), p.Name }).Distinct())
         {
-            if (family.GetMembers(name).IsEmpty)
+            if (name.Length > 0 && family.GetMembers(name).IsEmpty)
                 yield return "static double @" + name + " => 0;";
         }
     }

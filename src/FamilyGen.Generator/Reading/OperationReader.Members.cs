@@ -119,7 +119,7 @@ internal sealed partial class OperationReader
         foreach (var argument in call.Arguments)
         {
             if (argument.Parameter is { } parameter)
-                inner = inner.With(parameter, ReadValue(argument.Value, scope));
+                inner = inner.With(parameter, Bounded(ReadValue(argument.Value, scope), argument));
         }
 
         return Inside(method, call, () => RunBody(body, inner));

@@ -58,7 +58,7 @@ internal sealed partial class OperationReader
         foreach (var declarator in group.Declarations.SelectMany(d => d.Declarators))
         {
             if (declarator.GetVariableInitializer() is { } initializer)
-                scope = scope.With(declarator.Symbol, ReadValue(initializer.Value, scope));
+                scope = scope.With(declarator.Symbol, Bounded(ReadValue(initializer.Value, scope), declarator));
         }
 
         return scope;
@@ -88,10 +88,10 @@ internal sealed partial class OperationReader
         switch (assignment)
         {
             case ISimpleAssignmentOperation simple:
-                return scope.With(variable, ReadValue(simple.Value, scope));
+                return scope.With(variable, Bounded(ReadValue(simple.Value, scope), simple));
             case IIncrementOrDecrementOperation step when IsNumeric(step.Type):
                 var by = FormulaAt(step).Number(step.Kind == OperationKind.Increment ? 1 : -1);
-                return scope.With(variable, new NumberValue(FormulaAt(step).Add(ReadNumber(target, scope), by)));
+                return scope.With(variable, Bounded(new NumberValue(FormulaAt(step).Add(ReadNumber(target, scope), by)), step));
             case ICompoundAssignmentOperation { OperatorMethod: null } compound when IsNumeric(compound.Type)
                 && compound.OperatorKind is BinaryOperatorKind.Add or BinaryOperatorKind.Subtract or BinaryOperatorKind.Multiply
                     or BinaryOperatorKind.Divide or BinaryOperatorKind.Remainder:
@@ -100,7 +100,7 @@ internal sealed partial class OperationReader
                 var result = Combine(FormulaAt(compound), compound.OperatorKind, ReadNumber(target, scope), ReadNumber(compound.Value, scope), isIntegral);
                 if (IsIntegral(compound.Type) && !isIntegral)
                     result = FormulaAt(compound).Truncate(result);
-                return scope.With(variable, new NumberValue(result));
+                return scope.With(variable, Bounded(new NumberValue(result), compound));
             default:
                 Refuse(assignment);
                 return scope;
@@ -158,7 +158,7 @@ internal sealed partial class OperationReader
         {
             if ((a.Find(name), b.Find(name)) is not ({ } left, { } right))
                 continue;
-            joined = joined.With(name, ReferenceEquals(left, right) ? left : Join(condition, left, right, place));
+            joined = joined.With(name, ReferenceEquals(left, right) ? left : Bounded(Join(condition, left, right, place), place));
         }
 
         return joined;

@@ -79,6 +79,17 @@ internal sealed partial class OperationReader(ReadingSession session)
     private bool IsGeneratedParameter(IMemberReferenceOperation reference) =>
         IsOwn(reference.Member) && GeneratedFace.IsGenerated(reference.Member);
 
+    private Value Bounded(Value value, IOperation place) => Bounded(value, place.Syntax);
+
+    /// <summary>What a name is bound to, as long as its formula is of a size that can be analysed.</summary>
+    private Value Bounded(Value value, SyntaxNode place)
+    {
+        if (FormulaSize.IsManageable(value))
+            return value;
+        session.Refuse(session.Mark(place), ShapeFault.TooLarge());
+        return new NumberValue(Placeholder(-1));
+    }
+
     private static string Describe(ISymbol symbol) => symbol switch
     {
         IMethodSymbol { MethodKind: MethodKind.Constructor } constructor => "new " + constructor.ContainingType.Name,

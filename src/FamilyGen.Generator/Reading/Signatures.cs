@@ -168,8 +168,9 @@ internal sealed class Signatures
 
     private bool CheckMember(AttributedMember member, IParameterSymbol? observation)
     {
-        // An unknown type in a signature is the compiler's to report.
-        if (member.Type.TypeKind == TypeKind.Error || member.Arguments.Any(a => a.Type.TypeKind == TypeKind.Error))
+        // An unknown type or a missing name in a signature is the compiler's to report.
+        if (member.Type.TypeKind == TypeKind.Error || member.Symbol.Name.Length == 0
+            || member.Arguments.Any(a => a.Type.TypeKind == TypeKind.Error || a.Name.Length == 0))
         {
             _session.LeaveToCompiler();
             return false;
