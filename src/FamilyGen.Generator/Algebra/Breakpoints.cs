@@ -77,7 +77,7 @@ internal sealed class Breakpoints
                 Add(conditional.Condition);
                 break;
             case Call { Function: Function.Abs or Function.Sign } call:
-                AddRoots(call.Arguments[0], Relation.Less);
+                AddRoots(call.Arguments[0], call.Function == Function.Abs ? Relation.Less : Relation.Equal);
                 break;
             case Call { Function: Function.Min or Function.Max } call:
                 for (var i = 1; i < call.Arguments.Count; i++)
@@ -124,15 +124,20 @@ internal sealed class Breakpoints
     {
         if (Affine.In(function, _scope.Observation.Name) is { } affine)
         {
+            // c < x changes after c, as x ≤ c does.
+            var slope = _scope.RangeOf(affine.Slope);
+            var seen = slope.IsPositive ? relation
+                : slope.IsNegative && relation != Relation.Equal ? (relation == Relation.Less ? Relation.LessOrEqual : Relation.Less)
+                : Relation.Equal;
             if (!affine.Slope.IsZero())
-                AddPoint(affine.Root(), relation);
+                AddPoint(affine.Root(), seen);
             return;
         }
 
         if (Roots.Of(function, _scope) is { } roots)
         {
             foreach (var root in roots)
-                AddPoint(root, relation);
+                AddPoint(root, Relation.Equal);
         }
         else
         {
@@ -143,17 +148,15 @@ internal sealed class Breakpoints
     // On a lattice a point b is a change between the integers below it and those from it on.
     private void AddPoint(Expression point, Relation relation)
     {
-        if (_scope.Support.IsLattice && relation != Relation.Less)
-        {
-            var next = point is Number { Value: { IsInteger: true } n } ? Formula.Of(n + 1)
-                : point is Symbol { IsInteger: true } ? Formula.Sum(point, Formula.One)
-                : Formula.Sum(Formula.Call(Function.Floor, point), Formula.One);
-            AddInside(next, _points);
-            if (relation == Relation.LessOrEqual)
-                return;
-        }
-
-        AddInside(point, _points);
+        if (!_scope.Support.IsLattice || relation != Relation.LessOrEqual)
+            AddInside(point, _points);
+        if (!_scope.Support.IsLattice || relation == Relation.Less)
+            return;
+        AddInside(
+            point is Number { Value: { IsInteger: true } n } ? Formula.Of(n + 1)
+            : point is Symbol { IsInteger: true } ? Formula.Sum(point, Formula.One)
+            : Formula.Sum(Formula.Call(Function.Floor, point), Formula.One),
+            _points);
     }
 
     private void AddSingular(Expression argument)

@@ -23,7 +23,8 @@ internal sealed class EndAnalysis(Scope scope, IReadOnlyList<AtomSum> statistics
     public bool IsSingular(SupportEnd end)
     {
         var expansion = new AsymptoticExpansion(end, scope, new Dictionary<Condition, bool>());
-        return statistics.Append(logBase).Any(s => !IsSmooth(Expand(s, expansion)));
+        var isSmooth = IsSmooth(Expand(logBase, expansion));
+        return !expansion.IsExcluded && !(isSmooth && statistics.All(s => IsSmooth(Expand(s, expansion))));
     }
 
     private IEnumerable<EndRow> Rows(SupportEnd end, string where, Dictionary<Condition, bool> assumed)

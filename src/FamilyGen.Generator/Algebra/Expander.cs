@@ -14,6 +14,8 @@ internal sealed partial class Expander(Scope scope)
     private const int HighestExpandedPower = 24;
     private const int HighestFreePower = 4;
 
+    private static readonly Expression s_pi = new Constant(Math.PI, "π");
+
     private readonly Dictionary<Expression, Polynomial> _sums = new(StructuralOrder.Instance);
     private readonly List<Finding> _findings = new();
 
@@ -66,7 +68,21 @@ internal sealed partial class Expander(Scope scope)
             return NegativeInfinity;
         if (constant.Value == Math.Floor(constant.Value) && Math.Abs(constant.Value) < 1e15)
             return Polynomial.Of((Rational)(long)constant.Value);
-        return Polynomial.Of(constant with { Origin = -1 });
+        return PiMultiple(constant.Value) ?? Polynomial.Of(constant with { Origin = -1 });
+    }
+
+    // 2π, as the compiler folds it, is twice π.
+    private static Polynomial? PiMultiple(double value)
+    {
+        var ratio = value / Math.PI;
+        for (var denominator = 1; denominator <= 12; denominator++)
+        {
+            var numerator = Math.Round(ratio * denominator);
+            if (numerator != 0 && Math.Abs(numerator) <= 720 && Math.PI * numerator / denominator == value)
+                return Polynomial.Of(s_pi) * new Rational((long)numerator, denominator);
+        }
+
+        return null;
     }
 
     /// <summary>The formula as one term whose sums are not multiplied out; null when it is zero.</summary>

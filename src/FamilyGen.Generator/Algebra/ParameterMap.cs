@@ -89,11 +89,9 @@ internal static class ParameterMap
             pivotOf[column] = rank++;
         }
 
-        var open = Array.IndexOf(pivotOf, -1);
-        if (rank == columns || open < 0)
-            return (rank, Array.Empty<string>());
+        var open = Enumerable.Range(0, columns).Where(j => pivotOf[j] < 0).ToList();
         var free = Enumerable.Range(0, columns)
-            .Where(j => j == open || (pivotOf[j] >= 0 && Math.Abs(matrix[pivotOf[j], open] / matrix[pivotOf[j], j]) > 1e-7))
+            .Where(j => pivotOf[j] < 0 || open.Any(o => Math.Abs(matrix[pivotOf[j], o] / matrix[pivotOf[j], j]) > 1e-7))
             .Select(j => parameters[j])
             .ToList();
         return (rank, free);

@@ -63,18 +63,28 @@ internal readonly struct Rational : IEquatable<Rational>, IComparable<Rational>
         ? new(BigInteger.Pow(a.Numerator, n), BigInteger.Pow(a.Denominator, n))
         : new(BigInteger.Pow(a.Denominator, -n), BigInteger.Pow(a.Numerator, -n));
 
-    /// <summary>The nearest double.</summary>
+    /// <summary>The nearest double, ties to even. (The conversion of a BigInteger truncates.)</summary>
     public double ToDouble()
     {
-        if (IsInteger)
-            return (double)Numerator;
+        if (IsZero)
+            return 0;
 
-        // Scale so that the integer quotient has at least 64 bits; the conversion then rounds once.
-        var shift = 64 - (int)(BitLength(Numerator) - BitLength(Denominator));
-        var quotient = shift >= 0
-            ? (BigInteger.Abs(Numerator) << shift) / Denominator
-            : BigInteger.Abs(Numerator) / (Denominator << -shift);
-        return Numerator.Sign * (double)quotient * Math.Pow(2, -shift);
+        // A quotient of 56 or 57 bits, fewer where the result is subnormal; what is left of the division only breaks ties.
+        var scale = Math.Max(BitLength(Numerator) - BitLength(Denominator) - 56, -1076);
+        var quotient = scale >= 0
+            ? BigInteger.DivRem(BigInteger.Abs(Numerator), Denominator << scale, out var rest)
+            : BigInteger.DivRem(BigInteger.Abs(Numerator) << -scale, Denominator, out rest);
+        var drop = Math.Max(BitLength(quotient) - 53, -1074 - scale);
+        var mantissa = quotient >> drop;
+        var dropped = quotient - (mantissa << drop);
+        var half = BigInteger.One << (drop - 1);
+        if (dropped > half || (dropped == half && (!rest.IsZero || !mantissa.IsEven)))
+            mantissa += 1;
+
+        // In two steps, since a power of two beyond the largest double would overflow.
+        var exponent = scale + drop;
+        var first = Math.Min(exponent, 900);
+        return Numerator.Sign * (double)(ulong)mantissa * Math.Pow(2, first) * Math.Pow(2, exponent - first);
     }
 
     /// <summary>The fraction that a decimal literal such as 2.5 or 1e-3 denotes.</summary>
@@ -112,9 +122,12 @@ internal readonly struct Rational : IEquatable<Rational>, IComparable<Rational>
         ? Numerator.ToString(CultureInfo.InvariantCulture)
         : Numerator.ToString(CultureInfo.InvariantCulture) + "/" + Denominator.ToString(CultureInfo.InvariantCulture);
 
-    private static long BitLength(BigInteger value)
+    private static int BitLength(BigInteger value)
     {
         var bytes = BigInteger.Abs(value).ToByteArray();
-        return bytes.Length * 8L;
+        var bits = (bytes.Length - 1) * 8;
+        for (int top = bytes[bytes.Length - 1]; top > 0; top >>= 1)
+            bits++;
+        return bits;
     }
 }

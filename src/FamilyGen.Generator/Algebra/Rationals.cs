@@ -12,6 +12,10 @@ internal static class Rationals
         return new Rational(BigInteger.Pow(value.Numerator, exponent), BigInteger.Pow(value.Denominator, exponent));
     }
 
+    /// <summary>Whether an integer power of a fraction would have more digits than anybody wants to carry.</summary>
+    public static bool IsTooLarge(Rational value, Rational exponent) =>
+        Abs(exponent) > 1000 || (value.Numerator.ToByteArray().Length + value.Denominator.ToByteArray().Length) * Abs(exponent).ToDouble() > 400;
+
     public static Rational Abs(Rational value) => value.Sign < 0 ? -value : value;
 
     /// <summary>The greatest g ≥ 0 of which both are integer multiples.</summary>

@@ -55,7 +55,11 @@ internal static class Roots
                 break;
             var value = Math.Sign(Value(function, middle));
             if (value == 0)
-                return middle;
+            {
+                high = middle;
+                break;
+            }
+
             if (value == sign)
                 low = middle;
             else

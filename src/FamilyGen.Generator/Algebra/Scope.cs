@@ -25,6 +25,12 @@ internal sealed class Scope
             lower.LowerOpen || !(Support.LowerIncluded || Support.IsLattice),
             upper.Upper,
             upper.UpperOpen || !(Support.UpperIncluded || Support.IsLattice));
+        foreach (var mass in Support.Masses)
+        {
+            // A point that carries probability belongs to the support even where it is an open end.
+            if (RangeOf(mass) is { IsFinite: true } at)
+                _observation = _observation.Join(at);
+        }
     }
 
     public SupportDeclaration Support { get; }
@@ -128,6 +134,8 @@ internal sealed class Scope
             lower, ranges.Where(r => r.Lower == lower).All(r => r.LowerOpen), upper, ranges.Where(r => r.Upper == upper).All(r => r.UpperOpen));
     }
 
+    private bool IsMass(Expression? point) => point is not null && Support.Masses.Any(m => StructuralOrder.Same(m, point));
+
     // An affine function of x that vanishes at an end of the support, x − threshold above a known threshold, has one sign.
     private Range? AtEnds(Expression expression)
     {
@@ -138,8 +146,8 @@ internal sealed class Scope
             return null;
         foreach (var (end, isUpper, included) in new[]
         {
-            (Support.Lower, false, Support.LowerIncluded || Support.IsLattice),
-            (Support.Upper, true, Support.UpperIncluded || Support.IsLattice),
+            (Support.Lower, false, Support.LowerIncluded || Support.IsLattice || IsMass(Support.Lower)),
+            (Support.Upper, true, Support.UpperIncluded || Support.IsLattice || IsMass(Support.Upper)),
         })
         {
             if (end is null || Affine.ValueAt(affine, end) is not { } value)

@@ -7,9 +7,9 @@ internal static class SingleTerms
 {
     /// <summary>termⁿ for an integer n, factor by factor.</summary>
     public static Polynomial Raise(Term term, Rational n) =>
-        Rationals.Abs(n) > 200 && term.Coefficient != Rational.One
+        term.Coefficient != Rational.One && Rationals.IsTooLarge(term.Coefficient, n)
             ? Polynomial.Of(Term.Of(Polynomial.Of(term).ToSortedExpression(), Polynomial.Of(n), -1))
             : Polynomial.Of(Term.Of(
-                Rationals.Power(term.Coefficient, Rationals.Abs(n) > 200 ? 1 : (int)n.Numerator),
+                term.Coefficient == Rational.One ? Rational.One : Rationals.Power(term.Coefficient, (int)n.Numerator),
                 term.Factors.Select(f => new Factor(f.Base, f.IsIndicator && n.Sign > 0 ? f.Exponent : f.Exponent * n, f.Origin))));
 }

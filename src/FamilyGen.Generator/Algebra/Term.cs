@@ -182,7 +182,7 @@ internal sealed class Term
         var floor = BigInteger.Divide(exponent.Numerator, exponent.Denominator);
         if (exponent.Sign < 0 && !exponent.IsInteger)
             floor -= 1;
-        if (BigInteger.Abs(floor) > 64 || (value.IsZero && floor.Sign < 0))
+        if (Rationals.IsTooLarge(value, exponent) || (value.IsZero && floor.Sign < 0))
         {
             rest.Add(factor);
             return Rational.One;

@@ -70,6 +70,12 @@ internal sealed class FamilyText
         return this;
     }
 
+    public FamilyText Mass(string point)
+    {
+        _support = _support with { Masses = _support.Masses.Append(Read(point)).ToEquatableArray() };
+        return this;
+    }
+
     public FamilyText Where(string predicate)
     {
         _support = _support with { Predicate = new FormulaReader(predicate, _symbols).ReadCondition() };
