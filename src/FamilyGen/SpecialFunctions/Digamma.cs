@@ -27,8 +27,8 @@ public static class Digamma
         -1.183257077685753e-08, -5.495315942645068e-09, 2.944930002207525e-09,
     ];
 
-    // B₂ₖ/(2k) for k = 1, 2, …
-    private static ReadOnlySpan<double> Asymptotic =>
+    /// <summary>B₂ₖ/(2k) for k = 1, 2, …: log x − ψ(x) = 1/(2x) + Σ B₂ₖ/(2k x²ᵏ).</summary>
+    internal static ReadOnlySpan<double> Asymptotic =>
     [
         1.0 / 12, -1.0 / 120, 1.0 / 252, -1.0 / 240, 1.0 / 132, -691.0 / 32760, 1.0 / 12, -3617.0 / 8160,
     ];
@@ -41,11 +41,7 @@ public static class Digamma
         if (x < 1)
             return Central(x, 1) - (1 / x);
         if (x >= 10)
-        {
-            var inverse = 1 / x;
-            var square = inverse * inverse;
-            return Math.Log(x) - (0.5 * inverse) - (square * Polynomial.Horner(Asymptotic, square));
-        }
+            return Math.Log(x) - LogMinus(x);
 
         var sum = 0.0;
         while (x >= 3)
@@ -55,6 +51,14 @@ public static class Digamma
         }
 
         return sum + Central(x, 0);
+    }
+
+    /// <summary>log x − ψ(x) for x ≥ 10, to 1 ulp: nothing of log x is left to cancel.</summary>
+    internal static double LogMinus(double x)
+    {
+        var inverse = 1 / x;
+        var square = inverse * inverse;
+        return (0.5 * inverse) + (square * Polynomial.Horner(Asymptotic, square));
     }
 
     // ψ(x + shift) for x + shift in [1, 3]
