@@ -14,6 +14,9 @@ public sealed class BesselKForm : IClosedForm
     public static int Count => 3;
 
     /// <inheritdoc/>
+    public static double RelativeError => 2e-14;
+
+    /// <inheritdoc/>
     public static bool TryEvaluate(
         ReadOnlySpan<double> settings, ReadOnlySpan<double> coefficients, out double logNormalizer, Span<double> mean, Span<double> covariance)
     {

@@ -87,7 +87,7 @@ internal static class ChainRule
                         if (factor == 0)
                             continue;
                         product += factor * covariance[(a * count) + b];
-                        weight += Math.Abs(factor) * Math.Sqrt(covariance[a * (count + 1)] * covariance[b * (count + 1)]);
+                        weight += Math.Abs(factor) * Math.Sqrt(covariance[a * (count + 1)]) * Math.Sqrt(covariance[b * (count + 1)]);
                     }
                 }
 

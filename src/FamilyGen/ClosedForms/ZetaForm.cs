@@ -11,6 +11,9 @@ public sealed class ZetaForm : IClosedForm
     public static int Count => 1;
 
     /// <inheritdoc/>
+    public static double RelativeError => 2e-13;
+
+    /// <inheritdoc/>
     public static bool TryEvaluate(
         ReadOnlySpan<double> settings, ReadOnlySpan<double> coefficients, out double logNormalizer, Span<double> mean, Span<double> covariance)
     {

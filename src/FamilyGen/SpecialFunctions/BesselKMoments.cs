@@ -8,7 +8,7 @@ namespace FamilyGen.Special;
 /// <remarks>With order ν = P − N and argument ω = 2√(PN), 2K_ν(ω) = ∫ exp(νt − ω cosh t) dt (Watson 1944, 6.22) has its
 /// mode at e^t = √(P/N), where the exponent is ν log √(P/N) − (P + N): the integral is what is left, of moderate size
 /// wherever K_ν itself is not. The trapezoid rule converges geometrically on it (Trefethen and Weideman 2014); its step
-/// follows from the width 2d of the strip in which the integrand is bounded by exp((P + N)(1 − cos d)).
+/// follows from the width 2d of a strip in which the integrand is bounded by (cos d)^−(P + N).
 /// Measured error against 60-digit values for P, N from 1e-12 to 1e12: logarithm 3e-15, means 4e-15 standard deviations,
 /// covariances 5e-15 of the product of standard deviations.</remarks>
 public static class BesselKMoments
@@ -25,9 +25,9 @@ public static class BesselKMoments
     public static bool TryEvaluate(double rise, double fall, out double logIntegral, Span<double> mean, Span<double> covariance)
     {
         var width = rise + fall;
-        var angle = Math.Min(1.4, Math.Sqrt(74 / width));
+        var angle = Math.Min(1.2, Math.Sqrt(74 / width));
         var halfSine = Math.Sin(0.5 * angle);
-        var step = 2 * Math.PI * angle / (37 + (2 * width * halfSine * halfSine));
+        var step = 2 * Math.PI * angle / (37 - (width * Elementary.Log1P(-2 * halfSine * halfSine)));
         Span<double> sums = stackalloc double[10];
         sums.Clear();
         sums[0] = 1;

@@ -159,4 +159,5 @@ def main():
 
 
 mp.dps = DIGITS
-main()
+if __name__ == "__main__":
+    main()
