@@ -92,6 +92,7 @@ internal static class Derivative
             Function.Cos => Formula.Negate(Formula.Call(Function.Sin, argument)),
             Function.Abs => Formula.Call(Function.Sign, argument),
             Function.LogGamma => Formula.Call(Function.Digamma, argument),
+            Function.LogGammaRatio => Formula.Call(Function.DigammaDifference, argument, call.Arguments[1]),
             Function.Floor or Function.Sign => Formula.Zero,
 
             // On integers both are continued along one residue class: x mod n stays, x / n is (x − x mod n)/n.

@@ -50,6 +50,12 @@ internal enum Function
     Max,
     LogGamma,
     Digamma,
+
+    /// <summary>log Γ(a + shift) − log Γ(a) for the arguments (a, shift); only where formulas are printed.</summary>
+    LogGammaRatio,
+
+    /// <summary>ψ(a + shift) − ψ(a) for the arguments (a, shift); only where formulas are printed.</summary>
+    DigammaDifference,
     Floor,
     Sign,
 

@@ -40,6 +40,9 @@ internal readonly record struct AtomForm(string? Slope, string? Residual)
                 return new($"{Times(w, text)}global::System.Math.Sign({At(w, text)})", $"{Library}.Abs({At(w, text)}, {Step(w, text)})");
             case Call { Function: Function.LogGamma } c when AffineForm.Match(c.Arguments[0]) is { } w:
                 return new($"{Times(w, text)}global::FamilyGen.Special.Digamma.Value({At(w, text)})", $"{Library}.LogGamma({At(w, text)}, {Step(w, text)})");
+            case Call { Function: Function.LogGammaRatio } c when AffineForm.Match(c.Arguments[0]) is { } w:
+                var shift = text.AtM.Print(c.Arguments[1]);
+                return new($"global::FamilyGen.Special.LogGammaRatio.Derivative({At(w, text)}, {shift})", $"{Library}.LogGammaRatio({At(w, text)}, {shift}, {Step(w, text)})");
             default:
                 return new(null, $"({text.AtX.Print(atom)}) - ({text.AtM.Print(atom)})");
         }

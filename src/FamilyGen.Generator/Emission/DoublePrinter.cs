@@ -25,6 +25,8 @@ internal sealed class DoublePrinter(string real, string? integer, Func<Symbol, s
         {
             Function.Log when OnePlus(call.Arguments[0]) is { } rest => $"global::FamilyGen.Special.Elementary.Log1P({Print(rest)})",
             Function.LogGamma => $"global::FamilyGen.Special.LogGamma.Value({Arg(0)})",
+            Function.LogGammaRatio => $"global::FamilyGen.Special.LogGammaRatio.Value({Arg(0)}, {Arg(1)})",
+            Function.DigammaDifference => $"global::FamilyGen.Special.LogGammaRatio.Derivative({Arg(0)}, {Arg(1)})",
             Function.Digamma => $"global::FamilyGen.Special.Digamma.Value({Arg(0)})",
             Function.Sign => $"(double)global::System.Math.Sign({Arg(0)})",
             Function.Atan2 or Function.Min or Function.Max => $"global::System.Math.{call.Function}({Arg(0)}, {Arg(1)})",

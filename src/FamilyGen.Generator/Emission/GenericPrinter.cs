@@ -22,6 +22,8 @@ internal sealed class GenericPrinter(string observation, Func<Symbol, string> sy
             Function.Exp or Function.Log or Function.Sin or Function.Cos or Function.Abs or Function.LogGamma or Function.Digamma =>
                 $"TNumber.{call.Function}({Arg(0)})",
 
+            Function.DigammaDifference => $"TNumber.DigammaDifference({Arg(0)}, {conditions.Print(call.Arguments[1])})",
+
             // Minimum and maximum through |a − b|, whose derivative at equality is their mean.
             Function.Min => $"((({Arg(0)}) + ({Arg(1)}) - TNumber.Abs({Arg(0)} - ({Arg(1)}))) / 2)",
             Function.Max => $"((({Arg(0)}) + ({Arg(1)}) + TNumber.Abs({Arg(0)} - ({Arg(1)}))) / 2)",

@@ -13,7 +13,7 @@ internal sealed class KernelEmitter(FamilyDeclaration declaration, NormalForm fo
     private const string Inherit = "/// <inheritdoc/>";
 
     private readonly KernelText _text = new(declaration);
-    private readonly List<AtomSum> _functions = form.Statistics.Select(s => s.Body).Append(form.LogBase).ToList();
+    private readonly List<AtomSum> _functions = form.Statistics.Select(s => s.Body).Append(form.LogBase).Select(GammaPairs.Joined).ToList();
 
     private bool HasKnown => declaration.Known.Count > 0;
 
@@ -85,7 +85,7 @@ internal sealed class KernelEmitter(FamilyDeclaration declaration, NormalForm fo
         writer.Line("remainder.Clear();");
         for (var i = 0; i < _functions.Count; i++)
         {
-            writer.Line($"value[{i}] = {Guarded(i, Combined(_functions[i], a => Operand(_text.AtX.Print(a), a)))};");
+            writer.Line($"value[{i}] = {Guarded(i, _functions[i].Terms.Count == 0 ? "0" : _text.AtX.Print(_functions[i].ToExpression()))};");
             if (ExactSquare(_functions[i]) is { } sign)
                 writer.Line($"remainder[{i}] = global::System.Math.FusedMultiplyAdd({sign}x.X, x.X, -value[{i}]);");
         }
@@ -141,7 +141,7 @@ internal sealed class KernelEmitter(FamilyDeclaration declaration, NormalForm fo
         var text = "";
         foreach (var term in sum.Terms)
         {
-            if (part(term.Atom) is not { } body)
+            if (part(term.Atom) is not { } body || body == "0")
                 continue;
             var (negative, factor) = Coefficient(term.Coefficient);
             body = factor.Length == 0 ? body : factor + " * " + Parenthesised(body);
@@ -161,8 +161,6 @@ internal sealed class KernelEmitter(FamilyDeclaration declaration, NormalForm fo
         Number { Value: var v } => (false, FormulaPrinter.Literal(v.ToDouble())),
         _ => (false, _text.AtX.Factor(coefficient)),
     };
-
-    private static string Operand(string text, Expression atom) => atom is Conditional ? $"({text})" : text;
 
     private static string Parenthesised(string body)
     {

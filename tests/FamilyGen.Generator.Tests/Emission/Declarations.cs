@@ -85,6 +85,14 @@ internal static class Declarations
                 [BaseMeasure] static double Weight(long x) => Exp(-GammaLn(x + 1));
             }
             """,
+        ["DamagedBoxes"] = """
+            [Family] public partial class DamagedBoxes
+            {
+                [Support] static CountRange Range => CountRange.From(0);
+                [SufficientStatistic] static double Damaged(int boxes) => boxes;
+                [LogBaseMeasure] static double Ways(int boxes, [Known] double size) => GammaLn(boxes + size) - GammaLn(size) - FactorialLn(boxes);
+            }
+            """,
         ["Outer+SwayAngle"] = """
             public static partial class Outer
             {
