@@ -62,13 +62,13 @@ internal static class ShapeFault
         $"'{argument}' of '{member}' is {type} but the observation of '{firstMember}' is {firstType}; use one type throughout";
 
     public static string KnownType(string argument, string type) =>
-        $"the known value '{argument}' is {type}; a known value is int, long or double";
+        $"The known value '{argument}' is {type}; a known value is int, long or double";
 
     public static string KnownHereOnly(string argument, string member, string knownIn) =>
         $"'{argument}' is a known value in '{knownIn}' but not in '{member}'; mark it [Known] in both";
 
     public static string ParameterType(string argument, string type) =>
-        $"the parameter '{argument}' is {type}; a parameter is double";
+        $"The parameter '{argument}' is {type}; a parameter is double";
 
     public static string NoParameters(string member) =>
         $"'{member}' has no parameter to estimate; add one as a further double argument";
@@ -95,7 +95,7 @@ internal static class ShapeFault
         $"{what} is not read as a support; use CountRange.From, Between or AllIntegers, or Interval.RealLine, Above, Below, Between or Circle with IncludingLower, IncludingUpper and WithMassAt";
 
     public static string ConditionalRange() =>
-        "a support is one range; choose between its ends (Between(0, n > 5 ? n : 5)), not between ranges";
+        "A support is one range; choose between its ends (Between(0, n > 5 ? n : 5)), not between ranges";
 
     public static string BadParameterName(string text) =>
         $"'{text}' is no name that an argument can have; use letters and digits, starting with a letter";
@@ -106,7 +106,7 @@ internal static class ShapeFault
         $"'{name}' calls itself; write a closed formula, since a recursion cannot be analysed";
 
     public static string NotExhaustive() =>
-        "this switch leaves some values without a result; add an arm '_ => …'";
+        "This switch leaves some values without a result; add an arm '_ => …'";
 
     public static string GeneratedMember(string name) =>
         $"'{name}' is generated from this declaration and cannot be used inside it; write the formula itself";
@@ -115,5 +115,5 @@ internal static class ShapeFault
         $"'{name}' cannot be called from generated code; make it internal, or write the formula itself";
 
     public static string TooLarge() =>
-        "the formula is too large to be analysed; simplify it, or hide a part behind a function of another assembly";
+        "The formula is too large to be analysed; simplify it, or hide a part behind a function of another assembly";
 }

@@ -44,7 +44,8 @@ internal static class GeneratedFace
                 yield return "static " + text;
         }
 
-        foreach (var name in declaration.Parameters.SelectMany(p => new[] { GeneratedNames.PropertyOf(p.Name), p.Name }).Distinct())
+        var parameters = declaration.Parameters.SelectMany(p => new[] { GeneratedNames.PropertyOf(p.Name), p.Name });
+        foreach (var name in parameters.Concat(declaration.Statistics.Select(s => s.Parameter)).Distinct())
         {
             if (name.Length > 0 && family.GetMembers(name).IsEmpty)
                 yield return "static double @" + name + " => 0;";

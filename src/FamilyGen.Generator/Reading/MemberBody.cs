@@ -38,10 +38,10 @@ internal static class MemberBody
         return null;
     }
 
-    /// <summary>The value that a field or an automatic property starts with.</summary>
+    /// <summary>The value that a field or an automatic property starts with, unless a static constructor has the last word.</summary>
     public static IOperation? Initializer(ISymbol member, ReadingSession session)
     {
-        if (!IsInSource(member, session))
+        if (!IsInSource(member, session) || IsNamedInStaticConstructor(member, session))
             return null;
         foreach (var reference in member.DeclaringSyntaxReferences)
         {
@@ -57,6 +57,11 @@ internal static class MemberBody
 
         return null;
     }
+
+    private static bool IsNamedInStaticConstructor(ISymbol member, ReadingSession session) =>
+        member.ContainingType.StaticConstructors.SelectMany(c => c.DeclaringSyntaxReferences)
+            .SelectMany(r => r.GetSyntax(session.Cancellation).DescendantNodes().OfType<IdentifierNameSyntax>())
+            .Any(n => n.Identifier.ValueText == member.Name);
 
     private static SyntaxNode? Getter(AccessorListSyntax accessors)
     {

@@ -54,7 +54,7 @@ internal sealed partial class OperationReader
 
     private static RangeValue AsRange(Value value) => value as RangeValue ?? s_line;
 
-    private void RefuseRange(IOperation operation) => Refuse(operation, ShapeFault.UnreadableRange("this"));
+    private void RefuseRange(IOperation operation) => Refuse(operation, ShapeFault.UnreadableRange("This"));
 
     private RangeValue ReadRangeFactory(IInvocationOperation call, Scope scope)
     {

@@ -29,7 +29,7 @@ internal sealed record Judgement(FamilyReading Reading, NormalForm? Form, Equata
         if (!reading.IsReadable || findings.Any(f => Severities.IsError(f.Id)))
             return new Judgement(reading, null, Causes(findings));
         var result = Normalizer.Normalize(reading.Declaration);
-        findings.AddRange(result.Findings);
+        findings.AddRange(result.Findings.Select(f => AtItsParameter(f, reading)));
         return new Judgement(reading, findings.Any(f => Severities.IsError(f.Id)) ? null : result.Form, Causes(findings));
     }
 
@@ -40,6 +40,16 @@ internal sealed record Judgement(FamilyReading Reading, NormalForm? Form, Equata
         var stage = findings.Where(f => Severities.IsError(f.Id)).Select(Stage).OrderBy(s => s, StringComparer.Ordinal).FirstOrDefault();
         return findings.Where(f => !Severities.IsError(f.Id) || Stage(f) == stage).Distinct()
             .OrderBy(f => f.Id, StringComparer.Ordinal).ThenBy(f => f.Origin).ToEquatableArray();
+    }
+
+    // A finding about parameters themselves is placed at the first of them that it names.
+    private static Finding AtItsParameter(Finding finding, FamilyReading reading)
+    {
+        if (finding.Id != DiagnosticIds.NotIdentified)
+            return finding;
+        var named = finding.Arguments[0].Split([", "], StringSplitOptions.None);
+        var place = reading.Names.FirstOrDefault(n => n.Kind == NamedPieceKind.TradeParameter && named.Contains(n.Name));
+        return place is null ? finding : finding with { Origin = place.Origin };
     }
 
     private static string Stage(Finding finding) => finding.Id.Substring(0, 4);

@@ -141,7 +141,7 @@ public class MemberShapeTests
 
     [Fact]
     public async Task Messages() => Assert.Equal(
-        ["FG0001: a loop is not read as a formula; write the sum or product in closed form"],
+        ["FG0001: A loop is not read as a formula; write the sum or product in closed form"],
         await Verify.Messages("""
             [Family] public partial class Stoppages
             {

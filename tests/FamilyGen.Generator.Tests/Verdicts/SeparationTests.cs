@@ -58,7 +58,7 @@ public class SeparationTests
                 [LogKernel] static double Kernel(double hours, {{parameters}}) => {{kernel}};
             }
             """));
-        Assert.StartsWith("FG0503", finding);
+        Assert.StartsWith("FG0503 at `rate", finding);
     }
 
     [Theory]
