@@ -80,8 +80,8 @@ public sealed record Domain
     public Point At(double x) => new()
     {
         X = x,
-        LogAboveLower = IsLattice || double.IsInfinity(Lower) ? double.NaN : Math.Log(x - Lower),
-        LogBelowUpper = IsLattice || double.IsInfinity(Upper) ? double.NaN : Math.Log(Upper - x),
+        LogAboveLower = IsLattice ? double.NaN : EndDistance.LogAbove(x, Lower, Upper),
+        LogBelowUpper = IsLattice ? double.NaN : EndDistance.LogBelow(x, Lower, Upper),
         Integer = IsLattice ? (long)x : 0,
     };
 }

@@ -87,7 +87,6 @@ internal sealed class BasinSweep<TKernel>
         if (!(end > 0))
             return;
         var start = 0.0;
-        var startLog = origin == 0 ? 0 : _panel.Log(origin, out _);
         var width = 2 * FoldDistance(_panel, origin, Math.Min(1, end / 2), end, direction);
         while (start < end)
         {
@@ -97,7 +96,7 @@ internal sealed class BasinSweep<TKernel>
             var size = Math.Min(width, end - start);
             if (start + size == start)
                 break;
-            var excess = _panel.Apply(QuadratureRule.Interval, origin + direction * (start + size / 2), direction * size / 2, size, startLog, Total);
+            var excess = _panel.Apply(QuadratureRule.Interval, origin + direction * (start + size / 2), direction * size / 2, size, Total);
             if (excess > 1)
             {
                 width = size * Growth(excess, 0.5);
@@ -108,7 +107,6 @@ internal sealed class BasinSweep<TKernel>
             Total.Add(_panel.Sums, size);
             _sink?.AddInterval(origin + (direction > 0 ? start : -(start + size)), size, _panel.Sums.Weight * size);
             start += size;
-            startLog = _panel.LastLog;
             width = size * Growth(excess, 4);
             if (share <= Negligible)
                 break;
@@ -120,7 +118,6 @@ internal sealed class BasinSweep<TKernel>
         if (!(end >= 1))
             return;
         var next = 1.0;
-        var startLog = 0.0;
         double width = end <= QuadratureRule.ShortestRun || _termByTerm
             ? 1
             : 2 * Math.Ceiling(FoldDistance(_panel, 0, Math.Min(Math.Abs(step), end * Math.Abs(step)), end * Math.Abs(step), Math.Sign(step)) / Math.Abs(step));
@@ -151,7 +148,7 @@ internal sealed class BasinSweep<TKernel>
             {
                 var rule = QuadratureRule.Lattice(power, out var half);
                 var length = Math.ScaleB(1, power);
-                var excess = _panel.Apply(rule, step * (next + (length - 1) / 2), step * half, length, startLog, Total);
+                var excess = _panel.Apply(rule, step * (next + (length - 1) / 2), step * half, length, Total);
                 if (excess > 1)
                 {
                     width = length * Math.Min(0.5, Growth(excess, 0.5));
@@ -165,7 +162,6 @@ internal sealed class BasinSweep<TKernel>
                 width = length * Math.Max(1, Growth(excess, 4));
             }
 
-            startLog = _panel.LastLog;
             quiet = share <= Negligible ? quiet + 1 : 0;
             if (quiet > (_termByTerm ? QuietRunsTermByTerm : 0))
                 break;

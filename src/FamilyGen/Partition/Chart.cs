@@ -100,8 +100,8 @@ internal readonly struct Chart
     public Point Reference(double x) => new()
     {
         X = x,
-        LogAboveLower = IsLattice || double.IsInfinity(Lower) ? double.NaN : Math.Log(x - Lower),
-        LogBelowUpper = IsLattice || double.IsInfinity(Upper) ? double.NaN : Math.Log(Upper - x),
+        LogAboveLower = IsLattice ? double.NaN : EndDistance.LogAbove(x, Lower, Upper),
+        LogBelowUpper = IsLattice ? double.NaN : EndDistance.LogBelow(x, Lower, Upper),
         RatioToLower = IsLattice || double.IsInfinity(Lower) ? double.NaN : 0,
         RatioToUpper = IsLattice || double.IsInfinity(Upper) ? double.NaN : 0,
     };

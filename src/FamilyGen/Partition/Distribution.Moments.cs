@@ -19,7 +19,7 @@ public sealed partial class Distribution<TKernel>
     /// partition; null where the range holds no point of the support.</summary>
     public CentredMoments? Moments(SubRange range)
     {
-        var partition = RangePartition<TKernel>.Over(_kernel, _theta, range, MomentPlan.Full(_kernel, _theta));
+        var partition = Evaluate(range, MomentPlan.Full(_kernel, _theta));
         return partition.Main is null ? null : MomentMerge.Of(partition);
     }
 

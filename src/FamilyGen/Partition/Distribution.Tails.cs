@@ -87,14 +87,14 @@ public sealed partial class Distribution<TKernel>
     /// <summary>log ∫ exp(Σ θⱼTⱼ + log h) over the part of the support that lies in the range; −∞ where there is none.</summary>
     public double LogPartition(SubRange range)
     {
-        var partition = RangePartition<TKernel>.Over(_kernel, _theta, range, MomentPlan.None);
+        var partition = Evaluate(range, MomentPlan.None);
         return partition.Main is null ? double.NegativeInfinity : partition.LogValue.Value;
     }
 
     /// <summary>log P(X in range), about the range's own mode.</summary>
     public double LogProbability(SubRange range)
     {
-        var partition = RangePartition<TKernel>.Over(_kernel, _theta, range, MomentPlan.None);
+        var partition = Evaluate(range, MomentPlan.None);
         return partition.Main is null
             ? double.NegativeInfinity
             : Math.Min(0, CompensatedSum.Difference(partition.LogValue, _whole.LogValue));

@@ -29,7 +29,7 @@ public sealed partial class Distribution<TKernel>
         _kernel = kernel;
         _domain = kernel.Domain;
         _theta = theta.ToArray();
-        _whole = RangePartition<TKernel>.Over(kernel, _theta, SubRange.Whole, MomentPlan.Full(kernel, theta));
+        _whole = Evaluate(SubRange.Whole, MomentPlan.Full(kernel, theta));
         if (_whole.Main is null)
             throw new PartitionException("The base measure vanishes on all of the support.");
         LogNormalizer = _whole.LogValue.Value;
@@ -103,6 +103,11 @@ public sealed partial class Distribution<TKernel>
         var expansion = _whole.Parts[index].Expansion;
         return expansion.Difference(expansion.Frame.Observation(x), residual, difference) - _logWeightFromMode[index];
     }
+
+    // The one place where a partition is evaluated, by the sweep that serves every family. Where a closed form is known it
+    // would be taken here; it has to give what the sweep gives: the reference point, the weight about it and the moments.
+    private RangePartition<TKernel> Evaluate(SubRange range, MomentPlan plan) =>
+        RangePartition<TKernel>.Over(_kernel, _theta, range, plan);
 
     // The basin that holds an observation, or −1 outside the support.
     private int PartAt(double x)

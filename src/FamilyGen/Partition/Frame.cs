@@ -109,8 +109,8 @@ internal readonly struct Frame
         {
             X = x,
             Displacement = displacement,
-            LogAboveLower = _hasLower ? Math.Log(x - _chart.Lower) : double.NaN,
-            LogBelowUpper = _hasUpper ? Math.Log(_chart.Upper - x) : double.NaN,
+            LogAboveLower = EndDistance.LogAbove(x, _chart.Lower, _chart.Upper),
+            LogBelowUpper = EndDistance.LogBelow(x, _chart.Lower, _chart.Upper),
             RatioToLower = _hasLower ? Ratio(displacement, _above, x - _chart.Lower, Reference.LogAboveLower) : double.NaN,
             RatioToUpper = _hasUpper ? Ratio(-displacement, _below, _chart.Upper - x, Reference.LogBelowUpper) : double.NaN,
         };

@@ -87,6 +87,8 @@ internal static class MomentMerge
             mean[i] = part.Sums.First[i] / part.Scale;
             for (var j = 0; j <= i; j++, cell++)
                 own[i, j] = own[j, i] = part.Sums.Second[cell] / part.Scale - mean[i] * mean[j];
+            if (double.IsNaN(own[i, i]))
+                own[i, i] = double.PositiveInfinity;
         }
 
         for (var i = 1; i < size; i++)

@@ -9,13 +9,10 @@ namespace FamilyGen.Partition;
 internal sealed class PanelSum<TKernel>
     where TKernel : struct, IKernel
 {
-    // The highest expansion coefficients of a panel's integrands may be this large beside the whole: those of the degrees
-    // that a Gauss rule leaves out are about their square.
-    private const double Tolerance = 1e-10;
-
-    // Where they fall slowly, as beside a kink or a branch point, the fall is continued to the degrees left out.
-    private const double Neglected = 1e-16;
+    // What rounding leaves of coefficients that should vanish, beside the panel's own part; the second one for each unit of
+    // the exponent.
     private const double Rounding = 2e-15;
+    private const double RoundingOfTerms = 1e-15;
 
     // A fall of the exponent that a rule must not step over before its first node.
     private const double SteepFall = 10;
@@ -27,7 +24,7 @@ internal sealed class PanelSum<TKernel>
     private readonly double[] _residual;
     private readonly double[] _difference;
     private readonly double[] _basis;
-    private readonly double[] _witness;
+    private readonly Resolution _resolution;
 
     public PanelSum(Expansion<TKernel> expansion, MomentPlan plan)
     {
@@ -35,15 +32,12 @@ internal sealed class PanelSum<TKernel>
         _residual = new double[TKernel.Count + 1];
         _difference = new double[TKernel.Count + 1];
         _basis = new double[plan.Size];
-        _witness = new double[(plan.Size + 1) * QuadratureRule.WitnessCount];
+        _resolution = new Resolution(plan);
         Sums = new Sums(plan);
     }
 
     /// <summary>The sums of the last panel, before its measure.</summary>
     public Sums Sums { get; }
-
-    /// <summary>The logarithm of the integrand at the last node of the last panel.</summary>
-    public double LastLog { get; private set; }
 
     /// <summary>f − f(m) and the logarithm of the integrand at an offset.</summary>
     public double Log(double offset, out double exponent)
@@ -67,8 +61,7 @@ internal sealed class PanelSum<TKernel>
         Sums.Clear();
         for (var i = 0; i < count; i++)
         {
-            LastLog = Log(first + step * i, out var exponent);
-            var weight = Math.Exp(LastLog);
+            var weight = Math.Exp(Log(first + step * i, out var exponent));
             if (weight > 0)
                 Sums.Add(weight, _basis, exponent);
         }
@@ -79,18 +72,18 @@ internal sealed class PanelSum<TKernel>
     /// <param name="center">The offset of the panel's middle.</param>
     /// <param name="halfWidth">Half its width, signed.</param>
     /// <param name="measure">The length of the panel, or its number of points.</param>
-    /// <param name="startLog">The logarithm of the integrand where the panel starts.</param>
     /// <param name="total">The sums before the panel, against which its error is judged.</param>
-    /// <returns>The size of the highest expansion coefficients beside the tolerance: at most 1 where the panel is resolved,
-    /// infinite where the integrand falls before the first node.</returns>
-    public double Apply(QuadratureRule rule, double center, double halfWidth, double measure, double startLog, Sums total)
+    /// <returns>The size of what is unresolved beside the tolerance: at most 1 where the panel is resolved, infinite where the
+    /// integrand falls before the first node.</returns>
+    public double Apply(QuadratureRule rule, double center, double halfWidth, double measure, Sums total)
     {
         Sums.Clear();
-        Array.Clear(_witness);
+        _resolution.Clear();
+        var startLog = CompareEnd(center - halfWidth, isStart: true);
+        var noise = 0.0;
         for (var i = 0; i < QuadratureRule.NodeCount; i++)
         {
             var log = Log(center + halfWidth * rule.Nodes[i], out var exponent);
-            LastLog = log;
             if (i == 0 && log < startLog - SteepFall && startLog > NegligibleLog)
                 return double.PositiveInfinity;
             var value = Math.Exp(log);
@@ -99,10 +92,29 @@ internal sealed class PanelSum<TKernel>
             if (!(value < double.PositiveInfinity))
                 throw new PartitionException(string.Create(CultureInfo.InvariantCulture, $"The integrand rises without bound near {_frame.At(center).X:R}."));
             Sums.Add(value * rule.Weights[i], _basis, exponent);
-            AddWitness(value, rule.Witness, i * QuadratureRule.WitnessCount);
+            _resolution.Add(rule, i, value, _basis);
+            noise += value * rule.Weights[i] * (Math.Abs(exponent) + Math.Abs(log - exponent));
         }
 
-        return Unresolved(measure, total);
+        CompareEnd(center + halfWidth, isStart: false);
+        noise = Rounding + _expansion.Noise + (Sums.Weight > 0 ? RoundingOfTerms * noise / Sums.Weight : 0);
+        return _resolution.Excess(measure, Sums, total, noise);
+    }
+
+    private double CompareEnd(double offset, bool isStart)
+    {
+        _expansion.At(offset, _residual, _difference, out var displacement, out var log);
+        if (double.IsFinite(log) && Math.Exp(log) is var value && double.IsFinite(value))
+        {
+            FillBasis(displacement);
+            _resolution.CompareEnd(isStart, value, _basis);
+        }
+        else if (!double.IsNegativeInfinity(log))
+        {
+            _resolution.SkipEnd(isStart);
+        }
+
+        return log;
     }
 
     private void FillBasis(double displacement)
@@ -113,55 +125,5 @@ internal sealed class PanelSum<TKernel>
         var tangential = _plan.Tangential;
         for (var j = 0; j < tangential.Length; j++)
             _basis[j + 1] = tangential[j] ? _residual[j] : _difference[j];
-    }
-
-    private void AddWitness(double value, double[] table, int row)
-    {
-        Span<double> witness = _witness;
-        for (var q = 0; q < QuadratureRule.WitnessCount; q++)
-            witness[q] += value * table[row + q];
-        var order = _plan.Order;
-        for (var i = 0; i < order.Length; i++)
-        {
-            if (order[i] == 0)
-                continue;
-            var moment = order[i] == 1 ? value * _basis[i] : value * _basis[i] * _basis[i];
-            for (var q = 0; q < QuadratureRule.WitnessCount; q++)
-                witness[(i + 1) * QuadratureRule.WitnessCount + q] += moment * table[row + q];
-        }
-    }
-
-    private double Unresolved(double measure, Sums total)
-    {
-        var worst = Excess(0, measure, total.Weight + measure * Sums.Weight);
-        for (var i = 0; i < _plan.Size; i++)
-        {
-            if (_plan.Order[i] > 0)
-                worst = Math.Max(worst, Excess(i + 1, measure, total.Scale[i] + measure * Sums.Scale[i]));
-        }
-
-        return worst;
-    }
-
-    private double Excess(int function, double measure, double scale)
-    {
-        var row = function * QuadratureRule.WitnessCount;
-        var last = Math.Max(Math.Abs(_witness[row]), Math.Abs(_witness[row + 1]));
-        var before = Math.Max(Math.Abs(_witness[row + 2]), Math.Abs(_witness[row + 3]));
-        if (!(Math.Max(last, before) > 0) || !double.IsFinite(scale))
-            return 0;
-        last *= measure / scale;
-        before *= measure / scale;
-        var excess = Math.Max(last, before) / Tolerance;
-        if (Math.Max(last, before) <= _expansion.Noise)
-            return 0;
-        if (excess > 1 || last <= Rounding)
-            return excess;
-
-        // what the rule leaves out starts another twenty degrees on; a fall from degree 17 to 19 by decay is one by decay⁶
-        // from 19 to 40 if it is that of a power of the degree
-        var decay = Math.Min(1, last / before);
-        var beyond = last * decay * decay * decay * decay * decay * decay / Neglected;
-        return beyond <= 1 ? excess : Math.Max(excess, beyond);
     }
 }

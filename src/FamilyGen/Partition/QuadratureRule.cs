@@ -33,8 +33,11 @@ internal sealed class QuadratureRule
         InverseRecurrence = Array.ConvertAll(root, r => 1 / r);
         Nodes = Roots(root);
         Weights = new double[NodeCount];
-        Witness = new double[NodeCount * WitnessCount];
+        const int Columns = WitnessCount + 2;
+        Witness = new double[NodeCount * Columns];
         Span<double> polynomial = stackalloc double[NodeCount];
+        Span<double> atEnd = stackalloc double[NodeCount];
+        Orthonormal(root, 1, atEnd);
         for (var i = 0; i < NodeCount; i++)
         {
             Orthonormal(root, Nodes[i], polynomial);
@@ -43,7 +46,18 @@ internal sealed class QuadratureRule
                 sum += value * value;
             Weights[i] = 1 / sum;
             for (var q = 0; q < WitnessCount; q++)
-                Witness[i * WitnessCount + q] = polynomial[NodeCount - 1 - q] / sum;
+                Witness[i * Columns + q] = polynomial[NodeCount - 1 - q] / sum;
+
+            // polynomials of odd degree change sign between the ends
+            double even = 0, odd = 0;
+            for (var k = 0; k < NodeCount; k += 2)
+            {
+                even += polynomial[k] * atEnd[k];
+                odd += polynomial[k + 1] * atEnd[k + 1];
+            }
+
+            Witness[i * Columns + WitnessCount] = (even - odd) / sum;
+            Witness[i * Columns + WitnessCount + 1] = (even + odd) / sum;
         }
     }
 
@@ -60,7 +74,8 @@ internal sealed class QuadratureRule
     public double[] Weights { get; }
 
     /// <summary>Node by node, the weight times the orthonormal polynomials of degrees 19 to 16: their sums with a
-    /// function's values are its highest expansion coefficients.</summary>
+    /// function's values are its highest expansion coefficients; and then the weights whose sums are the expansion at −1 and
+    /// at 1.</summary>
     public double[] Witness { get; }
 
     /// <summary>The rule on an interval.</summary>
