@@ -46,6 +46,12 @@ internal sealed class KernelEmitter(FamilyDeclaration declaration, NormalForm fo
         writer.Line(Inherit);
         writer.Line($"public static global::System.ReadOnlySpan<string> NaturalNames => new[] {{ {Quoted(form.Statistics.Select(s => s.Parameter))} }};");
         writer.Line();
+        if (!HasKnown)
+            return;
+        var values = string.Join(", ", declaration.Known.Select(k => $"{k.Name} = {{{Names.Pascal(k.Name)}}}"));
+        writer.Line("/// <summary>The known values, as messages quote them.</summary>");
+        writer.Line($"public override string ToString() => global::System.FormattableString.Invariant($\"{values}\");");
+        writer.Line();
     }
 
     private void WriteDomain()

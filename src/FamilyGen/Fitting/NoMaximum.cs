@@ -1,5 +1,6 @@
 using System;
 using System.Globalization;
+using System.Runtime.CompilerServices;
 using FamilyGen.Kernels;
 
 namespace FamilyGen.Fitting;
@@ -21,7 +22,7 @@ internal static class NoMaximum
     /// <summary>The account of statistics that are tied to each other.</summary>
     public static string AccountOfTie<TKernel>(StatisticSums<TKernel> sums, string family, string relation)
         where TKernel : struct, IKernel =>
-        $"{family} cannot be fitted: {relation}. Leave one of these statistics out, or choose other known values where they bring it about ({sums.Kernel}).";
+        $"{family} cannot be fitted: {relation}. Leave one of these statistics out{KnownValues(sums.Kernel)}.";
 
     /// <summary>The account of a search in the natural parameters that found no maximum.</summary>
     public static string Account<TKernel>(StatisticSums<TKernel> sums, string family, SearchPath path)
@@ -123,6 +124,11 @@ internal static class NoMaximum
             signs[j] = isLeast[j] == isGreatest[j] ? 0 : isGreatest[j] ? 1 : -1;
         return signs;
     }
+
+    /// <summary>A hint at the known values, for a kernel that has any: one without fields takes a single byte.</summary>
+    private static string KnownValues<TKernel>(TKernel kernel)
+        where TKernel : struct, IKernel =>
+        Unsafe.SizeOf<TKernel>() > 1 ? $", or choose other known values than {kernel} if these bring it about" : "";
 
     private static string Values(string[] names, double[] values)
     {

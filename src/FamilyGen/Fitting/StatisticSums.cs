@@ -100,8 +100,8 @@ public sealed class StatisticSums<TKernel>
         if (!EqualityComparer<TKernel>.Default.Equals(_kernel, other._kernel))
         {
             throw new ArgumentException(
-                $"The sums to merge were taken with other known values ({other._kernel}) than these ({_kernel}); their statistics "
-                + "are different functions. Keep one accumulator for each set of known values.",
+                $"The sums to merge were taken with the known values {other._kernel}, and these with {_kernel}: their statistics are "
+                + "different functions. Keep one accumulator for each set of known values.",
                 nameof(other));
         }
 
