@@ -86,9 +86,9 @@ internal sealed partial class Expander
         var origin = condition.Origin >= 0 ? condition.Origin : conditional.Origin;
         var names = condition.Operands().SelectMany(e => Dependences.Names(e, SymbolKind.Parameter)).Distinct().ToList();
         var text = Rendering.Text(condition);
-        if (whenTrue.IsNegativeInfinity || whenFalse.IsNegativeInfinity)
+        if (HasNoMassSomewhere(whenTrue) || HasNoMassSomewhere(whenFalse))
         {
-            var path = Rendering.Text(whenTrue.IsNegativeInfinity ? condition : Conditions.Not(condition)) + " → −∞";
+            var path = Rendering.Text(HasNoMassSomewhere(whenTrue) ? condition : Conditions.Not(condition)) + " → −∞";
             _findings.Add(new Finding("FG0101", origin, EquatableArray.Of(string.Join(", ", names), path)));
             return whenTrue.IsNegativeInfinity ? whenFalse : whenTrue;
         }
@@ -96,6 +96,9 @@ internal sealed partial class Expander
         _findings.Add(new Finding("FG0501", origin, EquatableArray.Of(text, Scope.Observation.Name, string.Join(", ", names), Hints.Declare(names))));
         return whenTrue;
     }
+
+    private static bool HasNoMassSomewhere(Polynomial branch) =>
+        branch.Terms.Any(t => t.Factors.Any(f => Dependences.Parts(f.Base).Any(p => p.IsNegativeInfinity())));
 
     // A piecewise function free of parameters is one function of x; constants are brought to an indicator.
     private static Polynomial Whole(Condition condition, Conditional conditional, Polynomial whenTrue, Polynomial whenFalse)

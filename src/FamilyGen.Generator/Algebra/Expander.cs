@@ -7,7 +7,9 @@ namespace FamilyGen.Generator.Algebra;
 
 /// <summary>Expands formulas into sums of products of irreducible factors. What depends on the observation and what depends
 /// on parameters ends up in different factors wherever the rules of the functions allow it.</summary>
-internal sealed partial class Expander(Scope scope)
+/// <param name="scope">The support and the symbols.</param>
+/// <param name="keepsCoefficients">Whether sums of parameters alone are left in their brackets.</param>
+internal sealed partial class Expander(Scope scope, bool keepsCoefficients = false)
 {
     // Beyond these a product of sums is left as it stands; the work stays bounded whatever is declared.
     private const int MostTerms = 1500;
@@ -147,8 +149,9 @@ internal sealed partial class Expander(Scope scope)
         return result;
     }
 
-    private static bool IsExpandable(Factor factor) =>
+    private bool IsExpandable(Factor factor) =>
         factor.Base is Sum
+        && !(keepsCoefficients && factor.Dependence == Dependence.Parameter)
         && factor.Exponent.AsInteger() is { } n
         && n > 0
         && n <= (factor.Dependence.Ties() ? HighestExpandedPower : HighestFreePower);
@@ -158,6 +161,13 @@ internal sealed partial class Expander(Scope scope)
     {
         if (sum.Terms.Count < 2)
             return sum.IsZero ? null : sum.Terms[0];
+        if (keepsCoefficients && sum.Dependence == Dependence.Parameter)
+        {
+            var written = sum.ToExpression(origin);
+            _sums[written] = sum;
+            return Term.Of(written, origin);
+        }
+
         var unit = CommonTerm(sum.Terms);
         var rest = Polynomial.Collect(sum.Terms.Select(t => Term.Multiply(t, Inverse(unit))));
         var leading = rest.Sorted()[0].Coefficient;

@@ -8,7 +8,7 @@ namespace FamilyGen.Generator.Algebra;
 /// why there is none. Never throws, and its work is bounded.</summary>
 /// <remarks>Arguments of the findings: FG0101 (parameter names, condition and what happens there); FG0501 (the factor that
 /// ties, its part in x, parameter names, what would mend it); FG0502 (number of parameters, number of statistics, their
-/// names); FG0503 (names of the parameters that cannot be told apart).</remarks>
+/// names); FG0503 (names of the parameters that cannot be told apart, what alone matters).</remarks>
 internal static class Normalizer
 {
     private const int MostNodes = 5000;
@@ -60,32 +60,47 @@ internal static class Normalizer
         if (findings.Count > 0)
             return Refused(findings.ToArray());
 
+        var parameters = declaration.Parameters.Select(p => p.Name).ToList();
+        var ranges = ParameterRanges.Of(kernel, expander.Scope, parameters);
+        foreach (var name in parameters)
+            expander.Scope.Narrow(name, ranges.Lower(name), ranges.Upper(name));
+
         var form = TradeForm.Of(IndicatorRelations.Apply(kernel, expander.Scope));
+        var bracketed = IndicatorRelations.Apply(
+            Separation.Separated(Expanded(declaration.Kernel!, new Expander(expander.Scope, keepsCoefficients: true))), expander.Scope);
         var names = new StatisticNames(declaration.Parameters.Select(p => p.Name).Concat(declaration.Known.Select(k => k.Name)));
         var statistics = new List<Statistic>();
         foreach (var part in form.Parts)
         {
             var body = AtomSums.Of(part.Statistic, expander.Scope.Observation, withConstant: false);
             var name = names.Next(body);
-            statistics.Add(new Statistic(StatisticNames.Capital(name), name, body, part.Natural.ToExpression().WithoutOrigins()));
+            statistics.Add(new Statistic(StatisticNames.Capital(name), name, body, TradeForm.Written(part, bracketed, expander).WithoutOrigins()));
         }
 
-        var parameters = declaration.Parameters.Select(p => p.Name).ToList();
         var rank = ParameterMap.Rank(statistics.Select(s => s.Natural!).ToList(), parameters, expander.Scope);
         if (rank is { } found && found.Rank < parameters.Count)
-            return Refused(new Finding("FG0503", declaration.Kernel!.Origin, EquatableArray.Of(string.Join(", ", found.Free))));
+            return Refused(new Finding("FG0503", declaration.Kernel!.Origin, EquatableArray.Of(string.Join(", ", found.Free), WhatMatters(found.Free, statistics))));
         if (parameters.Count < statistics.Count)
         {
             findings.Add(new Finding("FG0502", declaration.Kernel!.Origin, EquatableArray.Of(
                 Count(parameters.Count), Count(statistics.Count), string.Join(", ", statistics.Select(s => Rendering.Text(s.Body))))));
         }
 
-        var ranges = ParameterRanges.Of(kernel, expander.Scope, parameters);
-        foreach (var name in parameters)
-            expander.Scope.Narrow(name, ranges.Lower(name), ranges.Upper(name));
         var logBase = AtomSums.Of(form.LogBase, expander.Scope.Observation, withConstant: false);
         var inverse = InverseMap.Of(statistics, parameters, expander).ToEquatableArray();
         return Form(declaration, expander, statistics, logBase, inverse, ranges, findings);
+    }
+
+    // The coefficients in which the parameters occur: these alone are decided by data.
+    private static string WhatMatters(IReadOnlyList<string> names, List<Statistic> statistics)
+    {
+        var coefficients = statistics
+            .Where(s => Dependences.Names(s.Natural!, SymbolKind.Parameter).Intersect(names).Any())
+            .Select(s => Rendering.Text(s.Natural!))
+            .ToList();
+        return coefficients.Count == 0 ? "no statistic is multiplied by anything with them"
+            : coefficients.Count == 1 ? $"only {coefficients[0]} matters"
+            : $"only {string.Join(", ", coefficients.Take(coefficients.Count - 1))} and {coefficients[coefficients.Count - 1]} matter";
     }
 
     private static NormalFormResult Form(

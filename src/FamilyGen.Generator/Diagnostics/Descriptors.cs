@@ -64,7 +64,7 @@ internal static class Descriptors
     public static readonly DiagnosticDescriptor NotIdentified = Error(
         DiagnosticIds.NotIdentified,
         "The trade parameters cannot be told apart",
-        "The parameters {0} cannot be told apart: other values of them give the very same law, so no data decide between them; leave one out, or mark it as [Known]");
+        "The parameters {0} cannot be told apart: other values of them give the very same law ({1}), so no data decide between them; leave one out, or mark it as [Known]");
 
     /// <summary>All of them, in the order of their ids.</summary>
     public static ImmutableArray<DiagnosticDescriptor> All { get; } =

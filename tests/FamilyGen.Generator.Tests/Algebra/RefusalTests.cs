@@ -44,6 +44,7 @@ public class RefusalTests
     [InlineData("Log(x > t ? Exp(-rate * x) : 0)", "x > t", "x ≤ t → −∞")]
     [InlineData("Log((x > t ? 1 : 0) * Exp(-rate * x))", "x > t", "x ≤ t → −∞")]
     [InlineData("Log(Max(0, x - t)) - rate * x", "Max(0, x - t)", "x < t → −∞")]
+    [InlineData("x < t ? -rate * x : x < 9 ? -2 * rate * x : double.NegativeInfinity", "x < t", "x ≥ t → −∞")]
     [InlineData("2 * x > 3 * t && x < 9 ? -rate * x : double.NegativeInfinity", "2 * x > 3 * t", "x ≤ 1.5·t → −∞")]
     public void Support_that_moves(string kernel, string place, string what)
     {
@@ -54,16 +55,16 @@ public class RefusalTests
     }
 
     [Theory]
-    [InlineData("a b", "-a * b * x", "a, b")]
-    [InlineData("a b c", "-(a + b) * x - c * Log(x)", "a, b")]
-    [InlineData("a b", "-a * x + Log(b)", "b")]
-    [InlineData("a b", "Log(Exp(a) * x + Exp(a)) - b * x", "a")]
-    [InlineData("a b c", "-a * b * x - a * c * x * x - b", "a, b, c")]
-    [InlineData("a b c", "-Exp(a + b) * x - c * Exp(a + b) * x * x", "a, b")]
-    public void Parameters_that_cannot_be_told_apart(string parameters, string kernel, string names)
+    [InlineData("a b", "-a * b * x", "a, b", "only −a·b matters")]
+    [InlineData("a b c", "-(a + b) * x - c * Log(x)", "a, b", "only −(a + b) matters")]
+    [InlineData("a b", "-a * x + Log(b)", "b", "no statistic is multiplied by anything with them")]
+    [InlineData("a b", "Log(Exp(a) * x + Exp(a)) - b * x", "a", "no statistic is multiplied by anything with them")]
+    [InlineData("a b c", "-a * b * x - a * c * x * x - b", "a, b, c", "only −a·b and −a·c matter")]
+    [InlineData("a b c", "-Exp(a + b) * x - c * Exp(a + b) * x * x", "a, b", "only −exp(a + b) and −exp(a + b)·c matter")]
+    public void Parameters_that_cannot_be_told_apart(string parameters, string kernel, string names, string what)
     {
         var finding = FamilyText.Interval("0").LogKernel(parameters, kernel).Refusal();
-        Assert.Equal(("FG0503", names), (finding.Id, finding.Arguments[0]));
+        Assert.Equal(("FG0503", names, what), (finding.Id, finding.Arguments[0], finding.Arguments[1]));
     }
 
     [Fact]

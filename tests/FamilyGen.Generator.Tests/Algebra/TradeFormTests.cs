@@ -44,7 +44,7 @@ public class TradeFormTests
     {
         var family = FamilyText.Interval("0", known: "large").LogKernel(
             "shape rate tail jump", "x < large ? (shape - 1) * Log(x) - rate * x : jump - (tail + 1) * Log(x)");
-        Check(family, "0", "log(x)·[x < large] by shape − 1", "x·[x < large] by −rate", "[x ≥ large] by jump", "log(x)·[x ≥ large] by −tail − 1");
+        Check(family, "0", "log(x)·[x < large] by shape − 1", "x·[x < large] by −rate", "[x ≥ large] by jump", "log(x)·[x ≥ large] by −(tail + 1)");
     }
 
     [Fact]
@@ -154,6 +154,13 @@ public class TradeFormTests
         var family = FamilyText.Counts("0").LogKernel("rate", "x % 2 == 1 ? double.NegativeInfinity : x * Log(rate) - FactorialLn(x)");
         Check(family, "(−∞)·[(x mod 2) = 1] − log Γ(x + 1)", "x by log(rate)");
     }
+
+    [Theory]
+    [InlineData("(mean * size - 1) * Log(x) + ((1 - mean) * size - 1) * Log(1 + x)", "mean·size − 1", "size·(1 − mean) − 1")]
+    [InlineData("-size * mean * x - size * (1 - mean) * x * x", "−mean·size", "−size·(1 − mean)")]
+    [InlineData("-Pow(size + mean, 2) * x - size * Log(x)", "−(size + mean)²", "−size")]
+    public void Coefficients_keep_their_brackets(string kernel, params string[] naturals) => Assert.Equal(
+        naturals, FamilyText.Interval("0").LogKernel("mean size", kernel).Form().Statistics.Select(s => Rendering.Text(s.Natural!)));
 
     private static void Check(FamilyText family, string logBase, params string[] parts) => Check(family, logBase, parts, false);
 
