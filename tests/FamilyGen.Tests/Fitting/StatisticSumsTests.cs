@@ -11,13 +11,13 @@ public class StatisticSumsTests
     [Fact]
     public void Shards_merged_in_any_order_have_the_bits_of_the_whole() => Gen.Select(Gen.Int[0, 1000].Array[1, 200], Gen.Int[1, 6], Gen.Int).Sample((counts, parts, seed) =>
     {
-        var whole = new StatisticSums<StoppagesKernel>(default);
+        var whole = new StatisticSums<TradeKernel<ShiftStoppages>>(default);
         whole.AddRange(counts);
         var random = new Random(seed);
-        var shards = Enumerable.Range(0, parts).Select(_ => new StatisticSums<StoppagesKernel>(default)).ToArray();
+        var shards = Enumerable.Range(0, parts).Select(_ => new StatisticSums<TradeKernel<ShiftStoppages>>(default)).ToArray();
         foreach (var x in counts.OrderBy(_ => random.Next()))
             shards[random.Next(parts)].Add(x);
-        var merged = new StatisticSums<StoppagesKernel>(default);
+        var merged = new StatisticSums<TradeKernel<ShiftStoppages>>(default);
         foreach (var shard in shards.OrderBy(_ => random.Next()))
             merged.Merge(shard);
         return State(whole) == State(merged);
@@ -26,8 +26,8 @@ public class StatisticSumsTests
     [Fact]
     public void A_weight_is_a_repetition() => Gen.Select(Gen.Int[0, 50], Gen.Int[0, 4]).Array[1, 30].Sample(rows =>
     {
-        var weighted = new StatisticSums<StoppagesKernel>(default);
-        var repeated = new StatisticSums<StoppagesKernel>(default);
+        var weighted = new StatisticSums<TradeKernel<ShiftStoppages>>(default);
+        var repeated = new StatisticSums<TradeKernel<ShiftStoppages>>(default);
         foreach (var (x, times) in rows)
         {
             weighted.Add(x, times);
@@ -46,7 +46,7 @@ public class StatisticSumsTests
     [InlineData(1.5, "index 2 is 1.5: the support is the integers from 0 on, and this is no whole number")]
     public void An_invalid_observation_is_refused_by_index_and_nothing_is_added(double bad, string expected)
     {
-        var sums = new StatisticSums<StoppagesKernel>(default);
+        var sums = new StatisticSums<TradeKernel<ShiftStoppages>>(default);
         sums.Add(3);
         sums.Add(4);
         var before = State(sums);
@@ -64,14 +64,14 @@ public class StatisticSumsTests
     [InlineData(double.PositiveInfinity, "is ∞: a weight must be finite")]
     public void An_invalid_weight_is_refused(double weight, string expected)
     {
-        var sums = new StatisticSums<StoppagesKernel>(default);
+        var sums = new StatisticSums<TradeKernel<ShiftStoppages>>(default);
         sums.Add(3);
         var failure = Assert.Throws<ArgumentOutOfRangeException>(() => sums.Add(2, weight));
         Assert.Contains("observation at index 1 " + expected, failure.Message, StringComparison.Ordinal);
         Assert.Equal(1, sums.Count);
     }
 
-    private static (string Bits, long Count, double Weight, double Minimum, double Maximum, string Distinct) State(StatisticSums<StoppagesKernel> sums) =>
+    private static (string Bits, long Count, double Weight, double Minimum, double Maximum, string Distinct) State(StatisticSums<TradeKernel<ShiftStoppages>> sums) =>
         (string.Join(';', Enumerable.Range(0, 3).SelectMany(j => new[] { sums.Mean(j).High, sums.Mean(j).Low, sums.Smallest[j], sums.Largest[j] })
                 .Append(sums.MeanObservation()).Append(sums.Deviation())
                 .Select(x => BitConverter.DoubleToInt64Bits(x).ToString(CultureInfo.InvariantCulture))),

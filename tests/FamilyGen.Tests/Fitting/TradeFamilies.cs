@@ -146,3 +146,65 @@ internal readonly struct BearingHours : ITradeFamily
         public override TNumber Derivative<TNumber>(TNumber x, in Point piece) => slope(piece.X);
     }
 }
+
+/// <summary>{x, x²} on a half-line.</summary>
+internal readonly struct HalfLine : ITradeFamily
+{
+    public static Atom[] Statistics => [new Monomial(1), new Monomial(2)];
+
+    public static Domain Domain => new() { IsLattice = false, Lower = 0, Upper = double.PositiveInfinity, LowerIncluded = true };
+
+    public static NaturalSet NaturalSet => Parts.Set(
+        Parts.End(true, true, "x1 x2 1", (Parts.Named("x2"), [0, 1], 0), (Parts.Named("x1"), [1, 0], 0)));
+
+    public static string[] NaturalNames => ["hours", "squaredHours"];
+
+    public static string[] ParameterNames => ["hours", "squaredHours"];
+
+    public static (double Lower, double Upper)[] Ranges => [Range.Any, Range.Any];
+
+    public static void Natural<TNumber>(ReadOnlySpan<TNumber> parameters, Span<TNumber> theta)
+        where TNumber : struct, IArithmetic<TNumber> => (theta[0], theta[1]) = (parameters[0], parameters[1]);
+}
+
+/// <summary>{log x, x} from 1 on: a power tail that an exponential one cuts off.</summary>
+internal readonly struct TailFrom1 : ITradeFamily
+{
+    public static Atom[] Statistics => [new LogInside(), new Monomial(1)];
+
+    public static Domain Domain => new() { IsLattice = false, Lower = 1, Upper = double.PositiveInfinity, LowerIncluded = true };
+
+    public static NaturalSet NaturalSet => Parts.Set(
+        Parts.End(true, true, "log x1 1", (Parts.Named("x1"), [0, 1], 0), (Parts.Named("log"), [1, 0], 0)));
+
+    public static string[] NaturalNames => ["logHours", "hours"];
+
+    public static string[] ParameterNames => ["logHours", "hours"];
+
+    public static (double Lower, double Upper)[] Ranges => [Range.Any, Range.Any];
+
+    public static void Natural<TNumber>(ReadOnlySpan<TNumber> parameters, Span<TNumber> theta)
+        where TNumber : struct, IArithmetic<TNumber> => (theta[0], theta[1]) = (parameters[0], parameters[1]);
+}
+
+/// <summary>Two statistics of which one is a multiple of the other but for a constant.</summary>
+internal readonly struct TiedCounts : ITradeFamily
+{
+    public static Atom[] Statistics => [new Monomial(1), new SumOf(3, (2, new Monomial(1)))];
+
+    public static Atom LogBase => new LogGammaOf(-1, 1);
+
+    public static Domain Domain => Parts.Counts(0);
+
+    public static NaturalSet NaturalSet => Parts.Set(
+        Parts.End(true, true, "x1 x1 xlog", (Parts.Named("xlog"), [0, 0], -1), (Parts.Named("x1"), [1, 2], 1)));
+
+    public static string[] NaturalNames => ["pallets", "halfPallets"];
+
+    public static string[] ParameterNames => ["pallets", "halfPallets"];
+
+    public static (double Lower, double Upper)[] Ranges => [Range.Any, Range.Any];
+
+    public static void Natural<TNumber>(ReadOnlySpan<TNumber> parameters, Span<TNumber> theta)
+        where TNumber : struct, IArithmetic<TNumber> => (theta[0], theta[1]) = (parameters[0], parameters[1]);
+}
