@@ -21,6 +21,9 @@ internal static class ShapeFault
     public static string PrimaryConstructor(string name) =>
         $"'{name}' has a primary constructor; remove it: the constructor from the parameters is generated";
 
+    public static string UnchainedConstructor(string name) =>
+        $"This constructor leaves '{name}' without parameters; hand them to the generated constructor with ': this(…)'";
+
     public static string BaseWithoutConstructor(string name, string baseName) =>
         $"'{name}' derives from '{baseName}', which has no accessible constructor without arguments; derive from nothing, or add one";
 

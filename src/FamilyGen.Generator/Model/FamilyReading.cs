@@ -59,6 +59,9 @@ internal enum NamedPieceKind
     /// <summary>The observation, which becomes an argument of generated members.</summary>
     Observation,
 
+    /// <summary>A constructor that the user wrote with the arguments of the generated one.</summary>
+    Constructor,
+
     /// <summary>A declared member that calls a function of the language by the member's own name.</summary>
     CallOfItself,
 }

@@ -68,6 +68,7 @@ internal static class ClassShape
             return false;
         }
 
+        CheckConstructors(session);
         if (family.BaseType is not { SpecialType: not SpecialType.System_Object, TypeKind: not TypeKind.Error } parent
             || parent.InstanceConstructors.Any(c => c.Parameters.All(p => p.IsOptional) && session.Compilation.IsSymbolAccessibleWithin(c, family)))
         {
@@ -77,6 +78,21 @@ internal static class ClassShape
         session.Refuse(origin, ShapeFault.BaseWithoutConstructor(family.Name, parent.Name));
         return false;
     }
+
+    // A constructor that does not pass its values on would leave an instance without parameters.
+    private static void CheckConstructors(ReadingSession session)
+    {
+        foreach (var constructor in session.Family.InstanceConstructors)
+        {
+            if (!constructor.IsImplicitlyDeclared && !GeneratedFace.IsGenerated(constructor) && !IsChained(constructor, session))
+                session.Refuse(session.Mark(constructor), ShapeFault.UnchainedConstructor(session.Family.Name));
+        }
+    }
+
+    /// <summary>Whether a constructor calls another one of its class.</summary>
+    public static bool IsChained(IMethodSymbol constructor, ReadingSession session) =>
+        constructor.DeclaringSyntaxReferences.Any(r =>
+            r.GetSyntax(session.Cancellation) is ConstructorDeclarationSyntax { Initializer.RawKind: (int)SyntaxKind.ThisConstructorInitializer });
 
     private static bool CheckGeneric(ReadingSession session, int origin)
     {

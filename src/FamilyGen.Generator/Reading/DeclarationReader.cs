@@ -35,10 +35,7 @@ internal sealed class DeclarationReader(ReadingSession session, DeclaredMembers 
             baseMeasure,
             kernel,
             members.Kernel is null ? null : Describe(members.Kernel),
-            _signatures.Parameters)
-        {
-            MemberNames = NamesInUse.Own(session).ToEquatableArray(),
-        };
+            _signatures.Parameters);
     }
 
     private static EquatableArray<TypeShell> Outer(INamedTypeSymbol family)

@@ -33,7 +33,7 @@ internal static class FamilyReader
         var canBeCompleted = ClassShape.Check(session);
         var members = DeclaredMembers.Find(session);
         var declaration = new DeclarationReader(session, members).Read();
-        NamesInUse.Collect(session);
+        declaration = NamesInUse.Collect(session, declaration);
         var reading = new FamilyReading(
             declaration, canBeCompleted, session.IsReadable, session.Faults, session.Dependencies, session.Names);
         return (reading, session.Locations.ToImmutableArray());

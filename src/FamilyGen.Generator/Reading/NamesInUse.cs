@@ -9,11 +9,24 @@ namespace FamilyGen.Generator.Reading;
 /// <summary>Collects the names of the class that may collide with generated ones.</summary>
 internal static class NamesInUse
 {
-    /// <summary>The members that the user wrote, and what the class inherits.</summary>
-    public static void Collect(ReadingSession session)
+    /// <summary>Notes the members that the user wrote and what the class inherits; the declaration with the former.</summary>
+    public static FamilyDeclaration Collect(ReadingSession session, FamilyDeclaration declaration)
     {
-        foreach (var member in OwnMembers(session))
+        var own = new List<string>();
+        foreach (var member in session.Family.GetMembers().Where(m => HasNameOfItsOwn(m) && !GeneratedFace.IsGenerated(m)))
+        {
             session.Name(member.Name, NamedPieceKind.Member, session.Mark(member));
+            own.Add(member.Name);
+        }
+
+        foreach (var constructor in session.Family.InstanceConstructors.Where(c => HasGeneratedArguments(c, declaration) && !GeneratedFace.IsGenerated(c)))
+        {
+            // One that hands nothing on is refused for that.
+            if (ClassShape.IsChained(constructor, session))
+                session.Name(session.Family.Name, NamedPieceKind.Constructor, session.Mark(constructor));
+            own.Add(constructor.Name);
+        }
+
         var family = session.Mark(session.Family);
         session.Name(session.Family.Name, NamedPieceKind.Member, family);
         for (var parent = session.Family.BaseType; parent is not null; parent = parent.BaseType)
@@ -21,10 +34,9 @@ internal static class NamesInUse
             foreach (var member in parent.GetMembers().Where(m => HasNameOfItsOwn(m) && m.DeclaredAccessibility != Accessibility.Private))
                 session.Name(member.Name, NamedPieceKind.Inherited, family);
         }
-    }
 
-    /// <summary>The names of the members that the user wrote.</summary>
-    public static IEnumerable<string> Own(ReadingSession session) => OwnMembers(session).Select(m => m.Name).Distinct();
+        return declaration with { MemberNames = own.Distinct().ToEquatableArray() };
+    }
 
     /// <summary>Whether a member calls a known function by the member's own name, and so itself instead.</summary>
     public static bool CallsItself(ReadingSession session, ISymbol member)
@@ -40,8 +52,12 @@ internal static class NamesInUse
         return calls.Count > 0;
     }
 
-    private static IEnumerable<ISymbol> OwnMembers(ReadingSession session) =>
-        session.Family.GetMembers().Where(m => HasNameOfItsOwn(m) && !GeneratedFace.IsGenerated(m));
+    private static bool HasGeneratedArguments(IMethodSymbol constructor, FamilyDeclaration declaration)
+    {
+        var parameters = declaration.IsTrade ? declaration.Parameters.Count : declaration.Statistics.Count;
+        var types = Enumerable.Repeat("double", parameters).Concat(declaration.Known.Select(k => k.Type));
+        return !constructor.IsImplicitlyDeclared && constructor.Parameters.Select(p => p.Type.ToDisplayString()).SequenceEqual(types);
+    }
 
     private static bool HasNameOfItsOwn(ISymbol member) =>
         !member.IsImplicitlyDeclared

@@ -24,6 +24,7 @@ internal static class NameRule
         NamedPieceKind.TradeParameter => OfParameter(piece, reading),
         NamedPieceKind.NaturalParameter => OfNaturalParameter(piece, reading),
         NamedPieceKind.Known => OfKnown(piece, reading),
+        NamedPieceKind.Constructor => ["the generated constructor takes the same arguments"],
         NamedPieceKind.CallOfItself => [$"'{piece.Name}' hides the function '{piece.Name}' that its body calls, so it would call itself"],
         _ => [],
     };

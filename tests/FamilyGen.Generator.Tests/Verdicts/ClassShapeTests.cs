@@ -18,6 +18,8 @@ public class ClassShapeTests
     [InlineData("public static partial class {|FG0001:Stoppages|} { $ }")]
     [InlineData("public abstract partial class {|FG0001:Stoppages|} { $ }")]
     [InlineData("file partial class {|FG0001:Stoppages|} { $ }")]
+    [InlineData("public partial class Stoppages { $ public {|FG0001:Stoppages|}() { } }")]
+    [InlineData("public partial class Stoppages { $ {|FG0001:Stoppages|}(string label) : base() => Label = label; public string Label { get; } }")]
     [InlineData("public partial class {|FG0001:Stoppages|}(int unused) { $ public int Unused => unused; }")]
     public Task TheClass(string declaration) => Verify.Findings("[Family] " + declaration.Replace("$", Members));
 
@@ -42,6 +44,7 @@ public class ClassShapeTests
     [InlineData("partial class Stoppages : IComparable { $ public int CompareTo(object? other) => 0; }")]
     [InlineData("partial class Stoppages : Yard { $ } class Yard { }")]
     [InlineData("public partial class Stoppages { $ } public partial class Stoppages { public string Label => \"stoppages\"; }")]
+    [InlineData("public partial class Stoppages { $ public Stoppages(string rate) : this(double.Parse(rate)) { } }")]
     [InlineData("public partial class Stoppages { $ public string Label { get; set; } = \"\"; }")]
     public void LegitimateClasses(string declaration) => Assert.Empty(DeclaredSource.Findings("[Family] " + declaration.Replace("$", Members)));
 

@@ -27,6 +27,27 @@ public class NameTests
         }
         """);
 
+    [Fact]
+    public Task ConstructorOfTheSameArguments() => Verify.FindingsBesideCompilerErrors("""
+        [Family] public partial class Stoppages
+        {
+            [Support] static CountRange Range => CountRange.From(0);
+            [SufficientStatistic] static double Total(int x, [Known] int berths) => x * berths;
+            public {|FG0002:Stoppages|}(double a, int b) : this("") { }
+            Stoppages(string label) : this(label.Length, 2) { }
+        }
+        """);
+
+    [Fact]
+    public Task ConstructorOfTheSameArgumentsThatKeepsThem() => Verify.Findings("""
+        [Family] public partial class Stoppages
+        {
+            [Support] static CountRange Range => CountRange.From(0);
+            [SufficientStatistic] static double Total(int x, [Known] int berths) => x * berths;
+            public {|FG0001:Stoppages|}(double a, int b) { }
+        }
+        """);
+
     [Theory]
     [InlineData("double {|FG0002:mean|}", "-mean * x", "")]
     [InlineData("double {|FG0002:natural|}", "-natural * x", "")]
