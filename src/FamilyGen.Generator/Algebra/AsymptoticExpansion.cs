@@ -68,11 +68,11 @@ internal sealed class AsymptoticExpansion(SupportEnd end, Scope scope, IReadOnly
             case Function.Cos or Function.Sin:
                 return AsymptoticFunctions.Wave(call.Function, s);
             case Function.Abs:
-                return s.Sign is { } sign ? s * Polynomial.Of((Rational)sign) : s.IsZero ? s : s.IsBounded ? Bounded : AsymptoticSeries.Unknown;
+                return (s.Sign ?? SignByPlace(call.Arguments[0])) is { } sign ? s * Polynomial.Of((Rational)sign) : s.IsZero ? s : s.IsBounded ? Bounded : AsymptoticSeries.Unknown;
             case Function.Sign:
-                return s.Sign is { } known ? AsymptoticSeries.Of(Polynomial.Of((Rational)known)) : Bounded;
+                return (s.Sign ?? SignByPlace(call.Arguments[0])) is { } known ? AsymptoticSeries.Of(Polynomial.Of((Rational)known)) : Bounded;
             case Function.Min or Function.Max:
-                return arguments.Skip(1).Aggregate(s, (a, b) => Extreme(call, a, b));
+                return arguments.Count == 2 ? Extreme(call, s, arguments[1]) : AsymptoticSeries.Unknown;
             case Function.Floor:
                 return s.IsVerified && s.Error <= 0 ? s + Bounded : AsymptoticSeries.Unknown;
             case Function.IntegerQuotient:
@@ -87,10 +87,10 @@ internal sealed class AsymptoticExpansion(SupportEnd end, Scope scope, IReadOnly
 
     private static AsymptoticSeries Bounded { get; } = AsymptoticSeries.Of(AsymptoticTerm.Wave);
 
-    private static AsymptoticSeries Extreme(Call call, AsymptoticSeries a, AsymptoticSeries b)
+    private AsymptoticSeries Extreme(Call call, AsymptoticSeries a, AsymptoticSeries b)
     {
         var difference = a - b;
-        if (difference.Sign is { } sign)
+        if ((difference.Sign ?? SignByPlace(Formula.Difference(call.Arguments[0], call.Arguments[1]))) is { } sign)
             return (sign < 0) == (call.Function == Function.Min) ? a : b;
         if (difference.IsZero && difference.IsVerified)
             return a;
@@ -148,16 +148,16 @@ internal sealed class AsymptoticExpansion(SupportEnd end, Scope scope, IReadOnly
             return null;
         if (difference.IsZero)
             return double.IsNegativeInfinity(difference.Error) ? comparison.Relation != Relation.Less : null;
-        if ((difference.Sign ?? SignByPlace(comparison)) is not { } sign)
+        if ((difference.Sign ?? SignByPlace(Formula.Difference(comparison.Left, comparison.Right))) is not { } sign)
             return null;
         return comparison.Relation != Relation.Equal && sign < 0;
     }
 
-    // A known threshold lies inside the support: near the lower end x is below it, near the upper end above it. The direction
-    // of a comparison is that of its slope in x.
-    private int? SignByPlace(Comparison comparison)
+    // A known threshold lies inside the support: near the lower end x is below it, near the upper end above it. The sign of
+    // a difference that changes there follows from its slope in x.
+    private int? SignByPlace(Expression difference)
     {
-        if (Affine.In(Formula.Difference(comparison.Left, comparison.Right), scope.Observation.Name) is not { } affine)
+        if (Affine.In(difference, scope.Observation.Name) is not { } affine || (Dependences.Of(affine.Intercept) & Dependence.Known) == 0)
             return null;
         var slope = scope.RangeOf(affine.Slope);
         return slope.IsPositive ? (end.IsUpper ? 1 : -1) : slope.IsNegative ? (end.IsUpper ? -1 : 1) : null;

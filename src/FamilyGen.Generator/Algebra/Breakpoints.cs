@@ -167,7 +167,8 @@ internal sealed class Breakpoints
         foreach (var root in roots ?? Array.Empty<Expression>())
         {
             AddInside(root, _points);
-            AddInside(root, _singular);
+            if (IsSurelyInside(root))
+                AddInside(root, _singular);
         }
     }
 
@@ -185,6 +186,11 @@ internal sealed class Breakpoints
         if (!IsEnd(point) && !points.Any(p => StructuralOrder.Same(p, point)))
             points.Add(point);
     }
+
+    // Above a known limit log x is taken to be meant, and the limit to be positive: 0 is then no point of the support.
+    private bool IsSurelyInside(Expression root) => Dependences.Of(root) != Dependence.None
+        || ((_scope.Support.Lower is null || Dependences.Of(_scope.Support.Lower) == Dependence.None)
+            && (_scope.Support.Upper is null || Dependences.Of(_scope.Support.Upper) == Dependence.None));
 
     private bool IsEnd(Expression point) =>
         (_scope.Support.Lower is { } lower && StructuralOrder.Same(lower, point)) || (_scope.Support.Upper is { } upper && StructuralOrder.Same(upper, point));

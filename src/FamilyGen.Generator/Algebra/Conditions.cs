@@ -71,6 +71,20 @@ internal static class Conditions
                 return true;
             if (StructuralOrder.Same(parts[i], Not(part)))
                 return false;
+            if (Excluded(part) is { } excluded && Limit.Of(parts[i]) is { } limit && StructuralOrder.Same(limit.Quantity, excluded.Quantity))
+            {
+                // x = 1 says that x ≠ 0.
+                if (Limit.Exclude(limit, excluded))
+                    return true;
+                continue;
+            }
+
+            if (Excluded(parts[i]) is { } gone && Limit.Of(part) is { } next && StructuralOrder.Same(next.Quantity, gone.Quantity) && Limit.Exclude(next, gone))
+            {
+                parts.RemoveAt(i);
+                return Add(parts, part);
+            }
+
             if (Limit.Of(parts[i]) is not { } old || Limit.Of(part) is not { } added || !StructuralOrder.Same(old.Quantity, added.Quantity))
                 continue;
             if (Limit.Exclude(old, added))
@@ -87,6 +101,10 @@ internal static class Conditions
         parts.Add(part);
         return true;
     }
+
+    // The point that a ≠ leaves out.
+    private static Limit? Excluded(Condition condition) =>
+        condition is Not { Operand: Comparison { Relation: Relation.Equal } equal } ? Limit.Of(equal) : null;
 
     // quantity < number, quantity ≤ number, quantity > number …, as the interval it leaves.
     private readonly record struct Limit(Expression Quantity, double Lower, bool LowerOpen, double Upper, bool UpperOpen)

@@ -46,6 +46,8 @@ internal sealed class StatisticNames(IEnumerable<string> taken)
                 return Words(conditional.Condition);
             case Conditional conditional:
                 return Words(conditional.WhenTrue).Concat(new[] { "where" }).Concat(Words(conditional.Condition));
+            case Sum { Terms: { Count: 2 } t }:
+                return OfTwo(t[0], t[1]);
             case Sum sum:
                 return sum.Terms.Where(t => t is not Number).Take(1).SelectMany(Words);
             case Product product:
@@ -53,6 +55,23 @@ internal sealed class StatisticNames(IEnumerable<string> taken)
             default:
                 return Enumerable.Empty<string>();
         }
+    }
+
+    // one minus x, x plus one, x minus threshold
+    private static IEnumerable<string> OfTwo(Expression first, Expression second)
+    {
+        var (joint, rest) = second switch
+        {
+            Product { Factors: { Count: 2 } f } when f[0] is Number { Value: var n } && n == -1 => ("minus", f[1]),
+            Number { Value.Sign: < 0 } number => ("minus", Formula.Of(-number.Value)),
+            _ => ("plus", second),
+        };
+        var (left, right) = (Simple(first), Simple(rest));
+        return left.Concat(right.Length == 0 || left.Length == 0 ? right : new[] { joint }.Concat(right));
+
+        static string[] Simple(Expression part) => part is Number { Value: var n } && n == 1 ? new[] { "one" }
+            : part is Number { Value: { IsInteger: true, Sign: > 0 } m } ? new[] { m.ToString() }
+            : Words(part).ToArray();
     }
 
     private static IEnumerable<string> Words(Condition condition) => condition switch

@@ -109,6 +109,22 @@ public class GrowthTests
     }
 
     [Fact]
+    public void Known_ends_and_thresholds()
+    {
+        var tail = FamilyText.Interval("lo", null, known: "lo").LogKernel("a", "-(a + 1) * Log(x)");
+        Check(tail, [[-1.5]], [[-1], [0]], ("lo", 2));
+        Assert.Equal("a > 0", tail.Form().NaturalSetText);
+        Assert.False(tail.Form().LowerSingular);
+
+        var capped = FamilyText.Interval("0", known: "cap").LogKernel("a b", "-a * Min(x, cap) - b * Max(0, x - cap)").Form();
+        Assert.Equal(("b > 0", false), (capped.NaturalSetText, capped.LowerSingular));
+
+        var share = FamilyText.Interval("lo", "hi", known: "lo hi").LogKernel("a b", "(a - 1) * Log((x - lo) / (hi - lo)) + (b - 1) * Log((hi - x) / (hi - lo))");
+        Check(share, [[-0.9, 3]], [[-1, 0], [0, -1]], ("lo", 2), ("hi", 5));
+        Assert.Equal(["logXMinusLo", "logHiMinusX"], share.Form().Statistics.Select(s => s.Parameter));
+    }
+
+    [Fact]
     public void Claims_of_known_number()
     {
         var family = FamilyText.Interval("0", known: "#claims").LogKernel("shape rate", "(claims * shape - 1) * Log(x) - claims * rate * x");

@@ -48,6 +48,22 @@ public class TradeFormTests
     }
 
     [Fact]
+    public void Points_of_their_own()
+    {
+        Check(
+            FamilyText.Counts("0").LogKernel("a b c", "x == 0 ? a : x == 1 ? b : c * x - FactorialLn(x)"),
+            "−log Γ(x + 1)·[x ≠ 0 and x ≠ 1]",
+            "[x = 0] by a",
+            "[x = 1] by b",
+            "x·[x ≠ 0 and x ≠ 1] by c");
+        Check(
+            FamilyText.Interval("0").Mass("0").LogKernel("p rate", "x == 0 ? Log(p) : Log(1 - p) + Log(rate) - rate * x"),
+            "0",
+            "[x = 0] by log(p) − log(1 − p) − log(rate)",
+            "x·[x ≠ 0] by −rate");
+    }
+
+    [Fact]
     public void Known_values_go_with_the_observation()
     {
         var family = FamilyText.Interval("0", known: "#claims").LogKernel("shape rate", "(claims * shape - 1) * Log(x) - claims * rate * x");
