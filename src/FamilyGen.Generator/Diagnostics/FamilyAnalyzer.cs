@@ -30,11 +30,16 @@ public sealed class FamilyAnalyzer : DiagnosticAnalyzer
         if (!type.GetAttributes().Any(a => a.AttributeClass?.ToDisplayString() == FamilyReader.FamilyAttribute))
             return;
         var (reading, locations) = FamilyReader.Read(context.Compilation, type, context.CancellationToken);
-        foreach (var finding in Judgement.Of(reading).Findings)
+        var judgement = Judgement.Of(reading);
+        foreach (var finding in judgement.Findings)
         {
             var place = finding.Origin >= 0 && finding.Origin < locations.Length ? locations[finding.Origin] : type.Locations[0];
             context.ReportDiagnostic(ToDiagnostic(finding, place));
         }
+
+        // What reads well here was not readable for the generator: it has seen less.
+        if (judgement.Form is not null && GeneratedFace.IsStub(type))
+            context.ReportDiagnostic(Diagnostic.Create(Descriptors.Shape, type.Locations[0], ShapeFault.WrittenByAnotherGenerator(type.Name)));
     }
 
     private static Diagnostic ToDiagnostic(Finding finding, Location location) =>

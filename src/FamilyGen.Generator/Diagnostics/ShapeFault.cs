@@ -114,6 +114,9 @@ internal static class ShapeFault
     public static string GeneratedMember(string name) =>
         $"'{name}' is generated from this declaration and cannot be used inside it; write the formula itself";
 
+    public static string WrittenByAnotherGenerator(string name) =>
+        $"'{name}' uses something that another source generator writes, and generators do not see each other's code; write it into a source file";
+
     public static string Inaccessible(string name) =>
         $"'{name}' cannot be called from generated code; make it internal, or write the formula itself";
 

@@ -56,6 +56,10 @@ internal static class GeneratedFace
     public static bool IsGenerated(ISymbol symbol) =>
         !symbol.DeclaringSyntaxReferences.IsEmpty && symbol.DeclaringSyntaxReferences.All(r => IsGeneratedFile(r.SyntaxTree.FilePath));
 
+    /// <summary>Whether what was generated for the family is only the stub of a refused declaration.</summary>
+    public static bool IsStub(INamedTypeSymbol family) =>
+        family.GetTypeMembers("KernelForm").IsEmpty && family.GetMembers("LogNormalizer").Any(IsGenerated);
+
     private static bool IsGeneratedFile(string path) =>
         path == MadeUpFile || path.IndexOf(typeof(FamilyGenerator).FullName, StringComparison.Ordinal) >= 0;
 }

@@ -46,7 +46,7 @@ internal sealed partial class OperationReader
             case IFieldReferenceOperation field:
                 return AsCondition(ReadField(field));
             case IPropertyReferenceOperation property:
-                return AsCondition(ReadProperty(property, scope));
+                return AsCondition(ReadProperty(property));
             case IInvocationOperation call:
                 return AsCondition(ReadCall(call, scope));
             default:

@@ -67,7 +67,7 @@ internal sealed partial class OperationReader
             : new NumberValue(Refuse(reference));
     }
 
-    private Value ReadProperty(IPropertyReferenceOperation reference, Scope scope)
+    private Value ReadProperty(IPropertyReferenceOperation reference)
     {
         var property = reference.Property;
         if (ChangingSources.Reason(property) is not null)

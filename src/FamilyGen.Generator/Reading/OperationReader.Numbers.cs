@@ -30,7 +30,7 @@ internal sealed partial class OperationReader
             ILocalReferenceOperation local => AsNumber(ReadVariable(local, local.Local, scope)),
             IParameterReferenceOperation parameter => AsNumber(ReadVariable(parameter, parameter.Parameter, scope)),
             IFieldReferenceOperation field => AsNumber(ReadField(field)),
-            IPropertyReferenceOperation property => AsNumber(ReadProperty(property, scope)),
+            IPropertyReferenceOperation property => AsNumber(ReadProperty(property)),
             IInvocationOperation call => AsNumber(ReadCall(call, scope)),
             _ => Refuse(operation),
         };

@@ -36,7 +36,7 @@ internal sealed partial class OperationReader
             case IInvocationOperation call:
                 return AsRange(ReadCall(call, scope));
             case IPropertyReferenceOperation property:
-                return AsRange(ReadProperty(property, scope));
+                return AsRange(ReadProperty(property));
             case IFieldReferenceOperation field:
                 return AsRange(ReadField(field));
             case ILocalReferenceOperation local:

@@ -79,7 +79,7 @@ internal sealed partial class OperationReader
             IParameterReferenceOperation { Parameter.RefKind: RefKind.None } parameter => parameter.Parameter,
             _ => null,
         };
-        if (target is null || variable is null)
+        if (target is null || variable is null || IsOutside(variable))
         {
             RefuseAssignment(assignment, target);
             return scope;
@@ -106,6 +106,11 @@ internal sealed partial class OperationReader
                 return scope;
         }
     }
+
+    // A local function may assign to the locals around it; that effect would be lost when it returns.
+    private bool IsOutside(ISymbol variable) =>
+        session.Current is IMethodSymbol { MethodKind: MethodKind.LocalFunction } current
+        && !SymbolEqualityComparer.Default.Equals(variable.ContainingSymbol.OriginalDefinition, current);
 
     private void RefuseAssignment(IOperation assignment, IOperation? target)
     {

@@ -36,6 +36,9 @@ internal sealed class ReadingSession(Compilation compilation, INamedTypeSymbol f
     /// <summary>True once the declaration has proved too large; nothing more is then read.</summary>
     public bool IsExhausted { get; private set; }
 
+    /// <summary>The member whose body is being read.</summary>
+    public ISymbol? Current => _followed.LastOrDefault();
+
     public IReadOnlyList<Location> Locations => _locations;
 
     public EquatableArray<Finding> Faults => _faults.Distinct().ToEquatableArray();

@@ -34,6 +34,7 @@ public class BodyReadingTests
     [InlineData("switch (x) { default: return 3; case 0: return 1; }", "if((x = 0), 1, 3)")]
     [InlineData("double y = 0; switch (x) { case 0: if (x > 9) break; y = 1; break; } return y;", "if((x = 0), if((9 < x), 0, 1), 0)")]
     [InlineData("double F(double a) => a * x; return F(2.0);", "(2 * x)")]
+    [InlineData("return F(2); double F(double a) { a += x; return a; }", "(2 + x)")]
     [InlineData("{ double y = 2; return y * x; }", "(2 * x)")]
     public void Statements(string body, string formula) => Assert.Equal(formula, DeclaredSource.Formula(body, "int"));
 
@@ -49,6 +50,7 @@ public class BodyReadingTests
     [InlineData("Above(x, 3) ? 1 : 0", "static bool Above(double a, double b) => a > b;", "if((3 < x), 1, 0)")]
     [InlineData("Outer(x)", "static double Outer(double a) => Inner(a) + Inner(2 * a); static double Inner(double b) { if (b > 1) return b; return 1; }",
         "(if((1 < x), x, 1) + if((1 < (2 * x)), (2 * x), 1))")]
+    [InlineData("x * Tide", "static readonly double Tide = 2; static Stoppages() { Tide = 3; }", "(x * «global::Stoppages.@Tide»)")]
     [InlineData("x * (double)Berth.North", "enum Berth { South, North = 4 }", "(x * 4)")]
     public void MembersAreFollowed(string body, string members, string formula) =>
         Assert.Equal(formula, DeclaredSource.Formula(body, members: members));

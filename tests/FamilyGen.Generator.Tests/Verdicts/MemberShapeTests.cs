@@ -1,5 +1,8 @@
 using System.Threading.Tasks;
+using FamilyGen.Generator.Diagnostics;
 using FamilyGen.Generator.Tests.Reading;
+using Microsoft.CodeAnalysis.CSharp;
+using Microsoft.CodeAnalysis.Diagnostics;
 
 namespace FamilyGen.Generator.Tests.Verdicts;
 
@@ -82,6 +85,7 @@ public class MemberShapeTests
     [InlineData("{|FG0001:try { return x; } finally { }|}")]
     [InlineData("if (x > 3) {|FG0001:throw new Exception();|} return x;")]
     [InlineData("double sum = Sum(); return sum; double Sum() { {|FG0001:while (true) { }|} }")]
+    [InlineData("var y = x; return F() + y; int F() { {|FG0001:y++|}; return 1; }")]
     [InlineData("var pair = {|FG0001:(x, 2)|}; return {|FG0001:pair.Item1|};")]
     [InlineData("int y; y = {|FG0001:x = 2|}; return y;")]
     [InlineData("Func<int, int> f = {|FG0001:i => i|}; return 1;")]
@@ -137,6 +141,22 @@ public class MemberShapeTests
             }
             """);
         Assert.Equal(["FG0001 at `for (var i = 1; i <= n; i++) s += 1.0 / i;`"], findings);
+    }
+
+    [Fact]
+    public async Task MembersThatAnotherGeneratorWrites()
+    {
+        // The generator sees the first file only, the analyzer both.
+        var generated = DeclaredSource.Generate(DeclaredSource.Compile("""
+            [Family] public partial class Stoppages
+            {
+                [Support] static CountRange Range => CountRange.From(Tides.Least);
+                [SufficientStatistic] static double Total(int x) => x;
+            }
+            """));
+        var complete = generated.AddSyntaxTrees(CSharpSyntaxTree.ParseText("static class Tides { public const int Least = 1; }", DeclaredSource.Parse));
+        var diagnostic = Assert.Single(await complete.WithAnalyzers([new FamilyAnalyzer()]).GetAnalyzerDiagnosticsAsync());
+        Assert.Equal("'Stoppages' uses something that another source generator writes, and generators do not see each other's code; write it into a source file", diagnostic.GetMessage());
     }
 
     [Fact]
