@@ -27,8 +27,11 @@ internal static class UnsupportedOperations
         IObjectCreationOperation or IWithOperation => ShapeFault.Unsupported("A new object", "use numbers"),
         IAssignmentOperation or IIncrementOrDecrementOperation =>
             ShapeFault.Unsupported("An assignment inside an expression or to something that outlives it", "assign to a local in a statement of its own"),
-        IBinaryOperation { OperatorKind: BinaryOperatorKind.And or BinaryOperatorKind.Or or BinaryOperatorKind.ExclusiveOr
-            or BinaryOperatorKind.LeftShift or BinaryOperatorKind.RightShift or BinaryOperatorKind.UnsignedRightShift }
+        IBinaryOperation
+        {
+            OperatorKind: BinaryOperatorKind.And or BinaryOperatorKind.Or or BinaryOperatorKind.ExclusiveOr
+            or BinaryOperatorKind.LeftShift or BinaryOperatorKind.RightShift or BinaryOperatorKind.UnsignedRightShift
+        }
             or IUnaryOperation { OperatorKind: UnaryOperatorKind.BitwiseNegation } =>
             ShapeFault.Unsupported("Arithmetic on bits", "use %, / and * (x % 2 for the parity of x)"),
         IBinaryOperation { OperatorMethod: not null } or IUnaryOperation { OperatorMethod: not null }

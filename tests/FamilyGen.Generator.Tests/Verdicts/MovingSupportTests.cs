@@ -46,6 +46,11 @@ public class MovingSupportTests
     [InlineData("-rate * x + Log({|FG0101:x > delay|} ? 1 : 0)")]
     [InlineData("-rate * x + ({|FG0101:x > delay + 1|} ? 0 : -1 / 0.0)")]
     [InlineData("{|FG0101:x - delay > 0|} ? -rate * x : double.NegativeInfinity")]
+    [InlineData("-rate * x + Log({|FG0101:Max(0, x - delay)|})")]
+    [InlineData("-rate * x + Log({|FG0101:x > delay|} && x < 100 ? 1 : 0)")]
+    [InlineData("-rate * x + Log(Exp(-delay) * ({|FG0101:x > delay|} ? 1 : 0))")]
+    [InlineData("-rate * x + ({|FG0101:Sign(x - delay) > 0|} ? 0 : double.NegativeInfinity)")]
+    [InlineData("x switch { < 1 => double.NegativeInfinity, var y when {|FG0101:y < delay|} => double.NegativeInfinity, _ => -rate * x }")]
     public Task ByTheKernel(string kernel) => Verify.Findings($$"""
         [Family] public partial class RepairHours
         {
