@@ -15,13 +15,15 @@ internal sealed class BasinSweep<TKernel>
     private const int MostPanels = 4000;
     private const double MostTerms = 4e6;
 
-    // An unread function may leave long gaps; a sum over it ends after this many runs without a contribution.
+    // Where modes are not proved to be all, a sweep goes on past this many panels, or runs of terms, without a contribution.
+    private const int QuietPanels = 8;
     private const int QuietRunsTermByTerm = 16;
 
     private readonly PanelSum<TKernel> _panel;
     private readonly IPanelSink? _sink;
     private readonly bool _termByTerm;
     private readonly double _step;
+    private readonly int _quiet;
     private int _panels;
 
     /// <summary>Sweeps a basin.</summary>
@@ -36,6 +38,7 @@ internal sealed class BasinSweep<TKernel>
         _sink = sink;
         _termByTerm = termByTerm;
         _step = basin.Piece.Step;
+        _quiet = termByTerm ? QuietRunsTermByTerm : basin.IsProven ? 0 : QuietPanels;
         Total = new Sums(plan);
         var lower = expansion.Frame.OffsetOf(basin.Lower);
         var upper = expansion.Frame.OffsetOf(basin.Upper);
@@ -87,6 +90,7 @@ internal sealed class BasinSweep<TKernel>
         if (!(end > 0))
             return;
         var start = 0.0;
+        var quiet = 0;
         var width = 2 * FoldDistance(_panel, origin, Math.Min(1, end / 2), end, direction);
         while (start < end)
         {
@@ -108,7 +112,8 @@ internal sealed class BasinSweep<TKernel>
             _sink?.AddInterval(origin + (direction > 0 ? start : -(start + size)), size, _panel.Sums.Weight * size);
             start += size;
             width = size * Growth(excess, 4);
-            if (share <= Negligible)
+            quiet = share <= Negligible ? quiet + 1 : 0;
+            if (quiet > _quiet)
                 break;
         }
     }
@@ -163,7 +168,7 @@ internal sealed class BasinSweep<TKernel>
             }
 
             quiet = share <= Negligible ? quiet + 1 : 0;
-            if (quiet > (_termByTerm ? QuietRunsTermByTerm : 0))
+            if (quiet > _quiet)
                 break;
             if (double.IsInfinity(end) && !(next < 1e290))
                 throw new PartitionException("The tail of the sum over the integers is too heavy: it still counts beyond 1e290.");

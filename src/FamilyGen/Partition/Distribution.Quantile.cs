@@ -209,7 +209,7 @@ public sealed partial class Distribution<TKernel>
     {
         var start = Math.Round(_whole.Main!.Basin.Mode.X);
         if (Tables.IsOrdered && probability >= ThinTail)
-            start = PanelStart(probability, isUpper);
+            start = Approach(PanelStart(probability, isUpper), probability, isUpper);
         var (low, high) = (start, start);
         var stride = 1.0;
         if (Reaches(start, probability, isUpper, slack))
@@ -234,6 +234,21 @@ public sealed partial class Distribution<TKernel>
         }
 
         return (low, high);
+    }
+
+    // Newton's method from a point in the right panel, as if the lattice were a line.
+    private double Approach(double x, double probability, bool isUpper)
+    {
+        for (var step = 0; step < 8; step++)
+        {
+            var excess = (isUpper ? Tables.Above(x) : Tables.UpTo(x)) - probability;
+            var move = Math.Round(excess / Math.Exp(LogDensity(x)) * (isUpper ? 1 : -1));
+            if (!(Math.Abs(move) >= 1 && Math.Abs(move) < 1e15))
+                break;
+            x = Math.Clamp(x + move, _domain.Lower, _domain.Upper);
+        }
+
+        return x;
     }
 
     private double PanelStart(double probability, bool isUpper)

@@ -112,32 +112,42 @@ public sealed partial class Distribution<TKernel>
     // The basin that holds an observation, or −1 outside the support.
     private int PartAt(double x)
     {
+        if (!(Math.Abs(x) < double.PositiveInfinity))
+            return -1;
         var parts = _whole.Parts;
         if (_domain.IsLattice)
-        {
-            if (x != Math.Floor(x) || double.IsInfinity(x))
-                return -1;
-        }
-        else
-        {
-            if (!_domain.Masses.IsEmpty && _domain.Masses.Contains(x))
-            {
-                var mass = Array.FindLastIndex(parts, part => part.Basin.Piece.Step > 0 && part.Basin.Lower == x);
-                return mass;
-            }
+            return LatticePartAt(x);
+        if (!_domain.Masses.IsEmpty && _domain.Masses.Contains(x))
+            return MassAt(x);
+        if (x <= _domain.Lower ? !_domain.LowerIncluded || x < _domain.Lower : x >= _domain.Upper && (!_domain.UpperIncluded || x > _domain.Upper))
+            return -1;
 
-            if (x == _domain.Lower ? !_domain.LowerIncluded : x == _domain.Upper && !_domain.UpperIncluded)
-                return -1;
-        }
-
+        // pieces keep one double away from breakpoints
+        var (above, below) = (Math.BitIncrement(x), Math.BitDecrement(x));
         for (var i = 0; i < parts.Length; i++)
         {
             ref readonly var basin = ref parts[i].BasinReference;
-            if (x < basin.Lower || !(x <= basin.Upper) || (!_domain.IsLattice && basin.Piece.Step > 0))
-                continue;
-            if (basin.Piece.Step > 1 && Math.IEEERemainder(x - basin.Mode.X, basin.Piece.Step) != 0)
-                continue;
-            return i;
+            if (basin.Piece.Step == 0 && above >= basin.Lower && below <= basin.Upper)
+                return i;
+        }
+
+        return -1;
+    }
+
+    private int MassAt(double x) =>
+        Array.FindIndex(_whole.Parts, part => part.BasinReference.Piece.Step > 0 && part.BasinReference.Lower == x);
+
+    private int LatticePartAt(double x)
+    {
+        if (x != Math.Floor(x))
+            return -1;
+        var parts = _whole.Parts;
+        for (var i = 0; i < parts.Length; i++)
+        {
+            ref readonly var basin = ref parts[i].BasinReference;
+            if (x >= basin.Lower && x <= basin.Upper
+                && (basin.Piece.Step == 1 || Math.IEEERemainder(x - basin.Mode.X, basin.Piece.Step) == 0))
+                return i;
         }
 
         return -1;

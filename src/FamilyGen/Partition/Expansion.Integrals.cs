@@ -54,7 +54,7 @@ internal sealed partial class Expansion<TKernel>
 
     private double LogIntegrand(double offset, Span<double> residual, Span<double> difference)
     {
-        At(offset, residual, difference, out _, out var log);
+        At(offset, residual, difference, out _, out var log, out _);
         return double.IsNaN(log) ? double.NegativeInfinity : log;
     }
 }

@@ -97,20 +97,22 @@ internal sealed partial class Expansion<TKernel>
     public ReadOnlySpan<double> Values => _value;
 
     /// <summary>f − f(m) at an offset, with residuals and differences as for a point, the displacement, and the logarithm of
-    /// the integrand, log dx/du included, less its value at m.</summary>
-    public double At(double offset, Span<double> residual, Span<double> difference, out double displacement, out double log)
+    /// the integrand, log dx/du included, less its value at m. The size is that of the terms that were added, by which
+    /// rounding is judged.</summary>
+    public double At(double offset, Span<double> residual, Span<double> difference, out double displacement, out double log, out double size)
     {
         double exponent;
         if (FarTail<TKernel>.Reaches(Frame, offset))
         {
             exponent = Far.At(offset, difference, out log);
             displacement = double.PositiveInfinity;
+            size = Math.Abs(exponent);
             return exponent;
         }
 
         var x = Frame.At(offset, Reference.Integer);
         displacement = x.Displacement;
-        exponent = Difference(x, residual, difference);
+        exponent = Difference(x, residual, difference, out size);
         log = exponent + Frame.LogJacobian(x);
 
         // ∞ − ∞ where a power or the observation itself overflows: beyond every mode
@@ -120,13 +122,16 @@ internal sealed partial class Expansion<TKernel>
     }
 
     /// <summary>f(x) − f(m), with the residuals rⱼ(x) and the differences Tⱼ(x) − Tⱼ(m).</summary>
-    public double Difference(in Point x, Span<double> residual, Span<double> difference)
+    public double Difference(in Point x, Span<double> residual, Span<double> difference) =>
+        Difference(x, residual, difference, out _);
+
+    private double Difference(in Point x, Span<double> residual, Span<double> difference, out double size)
     {
         _kernel.Residuals(Reference, x, residual);
         var displacement = x.Displacement;
         var count = _theta.Length;
         var exponent = _tangent == 0 ? 0 : _tangent * displacement;
-        var size = Math.Abs(exponent);
+        size = Math.Abs(exponent);
         var isCancelled = false;
         for (var j = 0; j <= count; j++)
         {
@@ -146,7 +151,7 @@ internal sealed partial class Expansion<TKernel>
 
         return !isCancelled && (size <= LargePart || size <= 2 * Math.Abs(exponent))
             ? exponent
-            : PlainDifference(x, exponent, size, residual, difference);
+            : PlainDifference(x, exponent, ref size, residual, difference);
     }
 
     private FarTail<TKernel> Far => Volatile.Read(ref _far) ?? PublishFar();
@@ -158,7 +163,7 @@ internal sealed partial class Expansion<TKernel>
         return far;
     }
 
-    private double PlainDifference(in Point x, double exponent, double size, ReadOnlySpan<double> residual, Span<double> difference)
+    private double PlainDifference(in Point x, double exponent, ref double size, ReadOnlySpan<double> residual, Span<double> difference)
     {
         var count = _theta.Length;
         Span<double> value = stackalloc double[count + 1];
@@ -183,6 +188,9 @@ internal sealed partial class Expansion<TKernel>
             plainSize += Math.Abs(factor) * error;
         }
 
-        return plainSize < size || double.IsNaN(exponent) ? plain : exponent;
+        if (!(plainSize < size) && !double.IsNaN(exponent))
+            return exponent;
+        size = plainSize;
+        return plain;
     }
 }

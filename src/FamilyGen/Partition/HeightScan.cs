@@ -53,7 +53,7 @@ internal readonly ref struct HeightScan<TKernel>
             }
 
             var mode = Peak(grid[Math.Max(0, i - 1)], grid[Math.Min(height.Length - 1, i + 1)]);
-            basins.Add(new(piece, _chart.ReferenceNear(mode), lower, piece.Upper));
+            basins.Add(new(piece, _chart.ReferenceNear(mode), lower, piece.Upper, false));
             valley = i;
         }
     }
@@ -87,7 +87,7 @@ internal readonly ref struct HeightScan<TKernel>
                 mode = x;
         }
 
-        basins.Add(new(piece, _chart.Reference(mode), piece.Lower, piece.Upper));
+        basins.Add(new(piece, _chart.Reference(mode), piece.Lower, piece.Upper, false));
     }
 
     private double Peak(double low, double high)

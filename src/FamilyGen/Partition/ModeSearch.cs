@@ -46,11 +46,11 @@ internal readonly ref struct ModeSearch<TKernel>
         if (IsVoid(field, from, to))
             return true;
         var signs = SlopeSigns.Isolate(field, _chart.Kind, from, to, _chart.IsLattice ? piece.Step : 0, out var isProven);
-        Divide(piece, field, signs, from, to, basins);
+        Divide(piece, field, signs, from, to, isProven, basins);
         return isProven;
     }
 
-    private void Divide(Piece piece, in SlopeField<TKernel> field, List<SignedRange> signs, double from, double to, List<Basin> basins)
+    private void Divide(Piece piece, in SlopeField<TKernel> field, List<SignedRange> signs, double from, double to, bool isProven, List<Basin> basins)
     {
         if (signs.Count > 2 * MostModes)
             throw new PartitionException($"The exponent has more than {MostModes} modes: it oscillates too often to be integrated.");
@@ -67,17 +67,17 @@ internal readonly ref struct ModeSearch<TKernel>
             var upper = piece.Upper;
             if (!isLast)
                 upper = ObservationAt(Root(field, signs[i].To, signs[i + 1].From, -1));
-            AddBasin(piece, field, mode, lower, upper, isLast, basins);
+            AddBasin(piece, field, mode, lower, upper, isLast, isProven, basins);
             lower = upper;
         }
     }
 
-    private void AddBasin(Piece piece, in SlopeField<TKernel> field, double mode, double lower, double upper, bool isLast, List<Basin> basins)
+    private void AddBasin(Piece piece, in SlopeField<TKernel> field, double mode, double lower, double upper, bool isLast, bool isProven, List<Basin> basins)
     {
         if (!_chart.IsLattice)
         {
             var m = ModePoint(piece, mode);
-            basins.Add(new(piece, m, lower, upper));
+            basins.Add(new(piece, m, lower, upper, isProven));
             return;
         }
 
@@ -89,7 +89,7 @@ internal readonly ref struct ModeSearch<TKernel>
         var below = Math.Clamp(Member(piece, mode), first, last);
         var above = Math.Clamp(below + piece.Step, first, last);
         var best = above != below && field.Height(above) > field.Height(below) ? above : below;
-        basins.Add(new(piece, _chart.Reference(best), first, last));
+        basins.Add(new(piece, _chart.Reference(best), first, last, isProven));
     }
 
     private Point ModePoint(Piece piece, double mode)
@@ -163,7 +163,7 @@ internal readonly ref struct ModeSearch<TKernel>
         }
 
         if (!double.IsNaN(best))
-            basins.Add(new(piece, _chart.Reference(best), piece.Lower, piece.Upper));
+            basins.Add(new(piece, _chart.Reference(best), piece.Lower, piece.Upper, true));
     }
 
     /// <summary>The coordinate in a range at which the slope, times the direction, turns from positive to negative.</summary>

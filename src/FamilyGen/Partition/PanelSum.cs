@@ -25,6 +25,7 @@ internal sealed class PanelSum<TKernel>
     private readonly double[] _difference;
     private readonly double[] _basis;
     private readonly Resolution _resolution;
+    private double _size;
 
     public PanelSum(Expansion<TKernel> expansion, MomentPlan plan)
     {
@@ -42,7 +43,7 @@ internal sealed class PanelSum<TKernel>
     /// <summary>f − f(m) and the logarithm of the integrand at an offset.</summary>
     public double Log(double offset, out double exponent)
     {
-        exponent = _expansion.At(offset, _residual, _difference, out var displacement, out var log);
+        exponent = _expansion.At(offset, _residual, _difference, out var displacement, out var log, out _size);
         if (double.IsNaN(log))
             throw new PartitionException(string.Create(CultureInfo.InvariantCulture, $"The exponent is not a number at {_frame.At(offset).X:R}."));
         FillBasis(displacement);
@@ -93,7 +94,7 @@ internal sealed class PanelSum<TKernel>
                 throw new PartitionException(string.Create(CultureInfo.InvariantCulture, $"The integrand rises without bound near {_frame.At(center).X:R}."));
             Sums.Add(value * rule.Weights[i], _basis, exponent);
             _resolution.Add(rule, i, value, _basis);
-            noise += value * rule.Weights[i] * (Math.Abs(exponent) + Math.Abs(log - exponent));
+            noise += value * rule.Weights[i] * (_size + Math.Abs(log - exponent));
         }
 
         CompareEnd(center + halfWidth, isStart: false);
@@ -103,7 +104,7 @@ internal sealed class PanelSum<TKernel>
 
     private double CompareEnd(double offset, bool isStart)
     {
-        _expansion.At(offset, _residual, _difference, out var displacement, out var log);
+        _expansion.At(offset, _residual, _difference, out var displacement, out var log, out _);
         if (double.IsFinite(log) && Math.Exp(log) is var value && double.IsFinite(value))
         {
             FillBasis(displacement);

@@ -1,5 +1,6 @@
 using System;
 using System.Collections.Generic;
+using System.Linq;
 using FamilyGen.Kernels;
 
 namespace FamilyGen.Partition;
@@ -26,18 +27,26 @@ internal readonly record struct Piece(double Lower, double Upper, long Integer, 
         return pieces;
     }
 
+    // A condition may count the breakpoint itself to either side, and a point that carries probability of its own stands
+    // for itself: pieces keep one double away from both.
     private static void AddIntervals(Domain domain, SubRange range, List<Piece> pieces)
     {
         var lower = Math.Max(domain.Lower, range.Lower);
         var upper = Math.Min(domain.Upper, range.Upper);
-        foreach (var point in domain.Breakpoints)
+        foreach (var point in domain.Breakpoints.Union(domain.Masses).Order())
         {
-            if (point <= lower || point >= upper)
+            if (point < lower || point > upper)
                 continue;
-            pieces.Add(new(lower, point, 0, 0));
-            lower = point;
+            if (point > lower)
+                AddInterval(lower, Math.BitDecrement(point), pieces);
+            lower = Math.BitIncrement(point);
         }
 
+        AddInterval(lower, upper, pieces);
+    }
+
+    private static void AddInterval(double lower, double upper, List<Piece> pieces)
+    {
         if (lower < upper)
             pieces.Add(new(lower, upper, 0, 0));
     }

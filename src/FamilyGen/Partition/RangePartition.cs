@@ -93,7 +93,7 @@ internal sealed class RangePartition<TKernel>
         foreach (var point in domain.Masses)
         {
             if (range.Contains(point))
-                basins.Add(new(new Piece(point, point, 0, 1), chart.Reference(point), point, point));
+                basins.Add(new(new Piece(point, point, 0, 1), chart.Reference(point), point, point, true));
         }
 
         var expansions = new Expansion<TKernel>[basins.Count];

@@ -36,6 +36,7 @@ internal static class Parts
     {
         "1" => new(GrowthKind.Bounded),
         "log" => new(GrowthKind.Log),
+        "exp" => new(GrowthKind.Exponential),
         "log2" => new(GrowthKind.LogPower, 2),
         "xlog" => new(GrowthKind.PowerTimesLog),
         _ => new(GrowthKind.Power, double.Parse(name[1..])),

@@ -149,6 +149,72 @@ internal readonly struct EntropyLike : IAtomFamily
     public static NaturalSet NaturalSet => Parts.Everything;
 }
 
+/// <summary>{x, eˣ} on the line: the logarithm of a gamma variable.</summary>
+internal readonly struct LogGammaLaw : IAtomFamily
+{
+    public static Atom[] Statistics => [new Monomial(1), new ExponentialOf()];
+
+    public static Domain Domain => Parts.Line;
+
+    public static NaturalSet NaturalSet => Parts.Set(
+        Parts.End(true, true, "x1 exp 1", (Parts.Named("exp"), [0, 1], 0), (Parts.Named("x1"), [1, 0], 0)),
+        Parts.End(true, false, "x1 1 1", (Parts.Named("x1"), [-1, 0], 0)));
+}
+
+/// <summary>{log(1 + x²)} on the line: power tails on both sides.</summary>
+internal readonly struct PowerTails : IAtomFamily
+{
+    public static Atom[] Statistics => [new LogOnePlusSquare()];
+
+    public static Domain Domain => Parts.Line;
+
+    public static NaturalSet NaturalSet => Parts.Set(
+        Parts.End(true, true, "log 1", (Parts.Named("log"), [2], 0)),
+        Parts.End(true, false, "log 1", (Parts.Named("log"), [2], 0)));
+}
+
+/// <summary>{|x|, x} on the line.</summary>
+internal readonly struct Laplace : IAtomFamily
+{
+    public static Atom[] Statistics => [new Absolute(), new Monomial(1)];
+
+    public static Domain Domain => Parts.Line with { Breakpoints = [0] };
+
+    public static NaturalSet NaturalSet => Parts.Set(
+        Parts.End(true, true, "x1 x1 1", (Parts.Named("x1"), [1, 1], 0)),
+        Parts.End(true, false, "x1 x1 1", (Parts.Named("x1"), [1, -1], 0)));
+}
+
+/// <summary>{log(x − 1000), x} above 1000.</summary>
+internal readonly struct GammaFrom1000 : IAtomFamily
+{
+    public static Atom[] Statistics => [new LogAbove(1000), new Monomial(1)];
+
+    public static Domain Domain => Parts.Positive with { Lower = 1000 };
+
+    public static NaturalSet NaturalSet => Gamma.NaturalSet;
+}
+
+/// <summary>{cos 5000x} on the circle: ten thousand modes.</summary>
+internal readonly struct FineWave : IAtomFamily
+{
+    public static Atom[] Statistics => [new Wave(true, 5000)];
+
+    public static Domain Domain => VonMises.Domain;
+
+    public static NaturalSet NaturalSet => Parts.Everything;
+}
+
+/// <summary>{cos 40x} on the circle: forty modes.</summary>
+internal readonly struct CoarseWave : IAtomFamily
+{
+    public static Atom[] Statistics => [new Wave(true, 40)];
+
+    public static Domain Domain => VonMises.Domain;
+
+    public static NaturalSet NaturalSet => Parts.Everything;
+}
+
 /// <summary>x log x above a lower end at 0.</summary>
 internal sealed class XLogX : Atom
 {
@@ -180,4 +246,49 @@ internal sealed class Choice(Func<Point, bool> condition, Atom? yes, Atom? no) :
     public override TNumber Derivative<TNumber>(TNumber x, in Point piece) => At(piece) is { } atom ? atom.Derivative(x, piece) : 0;
 
     private Atom? At(in Point x) => condition(x) ? yes : no;
+}
+
+/// <summary>eˣ.</summary>
+internal sealed class ExponentialOf : Atom
+{
+    public override double Value(in Point x) => Math.Exp(x.X);
+
+    public override double Slope(in Point m) => Math.Exp(m.X);
+
+    public override double Residual(in Point m, in Point x) => FamilyGen.Kernels.Residual.Exp(m.X, x.Displacement);
+
+    public override TNumber Derivative<TNumber>(TNumber x, in Point piece) => TNumber.Exp(x);
+}
+
+/// <summary>log(1 + x²).</summary>
+internal sealed class LogOnePlusSquare : Atom
+{
+    public override double Value(in Point x) =>
+        Math.Abs(x.X) > 1e100 ? 2 * Math.Log(Math.Abs(x.X)) : Special.Elementary.Log1P(x.X * x.X);
+
+    public override TNumber Derivative<TNumber>(TNumber x, in Point piece) => (TNumber)2 / (x + (TNumber)1 / x);
+}
+
+/// <summary>|x|.</summary>
+internal sealed class Absolute : Atom
+{
+    public override double Value(in Point x) => Math.Abs(x.X);
+
+    public override double Slope(in Point m) => Math.Sign(m.X);
+
+    public override double Residual(in Point m, in Point x) => FamilyGen.Kernels.Residual.Abs(m.X, x.Displacement);
+
+    public override TNumber Derivative<TNumber>(TNumber x, in Point piece) => Math.Sign(piece.X);
+}
+
+/// <summary>log(x − lower) above a lower end.</summary>
+internal sealed class LogAbove(double lower) : Atom
+{
+    public override double Value(in Point x) => x.LogAboveLower;
+
+    public override double Slope(in Point m) => Math.Exp(-m.LogAboveLower);
+
+    public override double Residual(in Point m, in Point x) => FamilyGen.Kernels.Residual.LogAtEnd(x.RatioToLower);
+
+    public override TNumber Derivative<TNumber>(TNumber x, in Point piece) => (TNumber)1 / (x - lower);
 }

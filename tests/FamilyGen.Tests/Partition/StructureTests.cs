@@ -159,6 +159,105 @@ public class StructureTests
     }
 
     [Fact]
+    public void A_body_may_rise_up_to_the_point_where_another_takes_over()
+    {
+        double[] theta = [3, 0.02, -2, -3];
+        var loss = Of<GammaWithPowerTail>(theta);
+        var sum = 0.0;
+        const int Steps = 4000;                    // Simpson's rule on (0, 100)
+        for (var i = 0; i <= Steps; i++)
+        {
+            var x = 100.0 * i / Steps;
+            sum += (i is 0 or Steps ? 1 : i % 2 == 0 ? 2 : 4) * Math.Exp(3 * Math.Log(x) + 0.02 * x - 15.8);
+        }
+
+        var body = sum * 100 / Steps / 3;
+        var tail = Math.Exp(-2 - 2 * Math.Log(100) - Math.Log(2) - 15.8);
+        Near(15.8 + Math.Log(body + tail), loss.LogNormalizer, 1e-11);
+        Near(theta[0] * Math.Log(50) + 1 - loss.LogNormalizer, loss.LogDensity(50), 1e-13);
+        Near(theta[2] + theta[3] * Math.Log(100) - loss.LogNormalizer, loss.LogDensity(100), 1e-13);
+        Near(tail / (body + tail), loss.Survival(100), 1e-9);
+        Near(tail / (body + tail), loss.Survival(Math.BitDecrement(100)), 1e-9);
+        Near(loss.Cdf(100), Math.Exp(loss.LogProbability(SubRange.UpTo(100))), 1e-12);
+    }
+
+    [Fact]
+    public void Kinks_and_shifted_ends()
+    {
+        var laplace = Of<Laplace>(-3, 1);
+        Near(Math.Log(0.5 + 0.25), laplace.LogNormalizer, 1e-14);
+        Near((0.25 - 0.0625) / 0.75, laplace.Mean, 1e-13);
+        Near(Math.Log(1 / 0.75), laplace.LogDensity(0), 1e-14);
+        var shifted = Of<GammaFrom1000>(1, -1e6);
+        Near(-1e9 - 2 * Math.Log(1e6), shifted.LogNormalizer, 1e-15);
+        Near(2e-12, shifted.Variance, 1e-11);
+        Near(Math.Exp(-5) * 6, shifted.Survival(1000 + 5e-6), 1e-7);
+        Assert.True(shifted.IsProven);
+    }
+
+    [Theory]
+    [InlineData(0.001, 5)]
+    [InlineData(1, 1)]
+    [InlineData(1e6, 0.01)]
+    public void An_exponential_statistic(double shape, double rate)
+    {
+        var law = Of<LogGammaLaw>(shape, -rate);
+        Assert.True(law.IsProven);
+        Near(Special.LogGamma.Value(shape) - shape * Math.Log(rate), law.LogNormalizer, 1e-13);
+        Near(Special.Digamma.Value(shape) - Math.Log(rate), law.Mean, 1e-12);
+        Near(Special.Trigamma.Value(shape), law.Variance, 1e-11);
+        Near(shape / rate, law.MeanStatistics()[1], 1e-11);
+    }
+
+    [Theory]
+    [InlineData(-1)]
+    [InlineData(-0.55)]
+    public void Power_tails_on_both_sides(double theta)
+    {
+        var law = Of<PowerTails>(theta);
+        var half = -theta - 0.5;
+        Near(0.57236494292470009 + Special.LogGamma.Value(half) - Special.LogGamma.Value(half + 0.5), law.LogNormalizer, 1e-12);
+        Near(Special.Digamma.Value(half + 0.5) - Special.Digamma.Value(half), law.MeanStatistics()[0], 1e-10);
+        Assert.Throws<PartitionException>(() => Of<PowerTails>(-0.5005));
+    }
+
+    [Fact]
+    public void Many_modes_are_summed_and_too_many_are_refused()
+    {
+        Near(Of<VonMises>(300, 0).LogNormalizer, Of<CoarseWave>(300).LogNormalizer, 1e-14);
+        Assert.Throws<PartitionException>(() => Of<FineWave>(50));
+    }
+
+    [Fact]
+    public void Faces_and_moments_that_are_infinite()
+    {
+        Near(Of<Geometric>(-0.5).LogNormalizer, Of<DispersedCount>(-0.5, 0).LogNormalizer, 1e-15);
+        var gamma = Of<Duration>(1, -2, 0);
+        Near(-2 * Math.Log(2), gamma.LogNormalizer, 1e-14);
+        Near(2, gamma.MeanStatistics()[2], 1e-12);
+        Assert.Equal(double.PositiveInfinity, gamma.StatisticCovariance()[2, 2]);
+        Near(0.5, gamma.StatisticCovariance()[0, 1], 1e-12);
+        Assert.Equal(double.PositiveInfinity, Of<Duration>(-0.5, -2, 0).MeanStatistics()[2]);
+        var inverse = Of<Duration>(-1.5, 0, -1);
+        Assert.Equal(double.PositiveInfinity, inverse.Mean);
+        Assert.Equal(double.PositiveInfinity, inverse.MeanStatistics()[1]);
+        Near(0.5, inverse.MeanStatistics()[2], 1e-12);
+        Assert.True(double.IsFinite(inverse.Entropy));
+    }
+
+    [Fact]
+    public void A_density_allocates_nothing()
+    {
+        var law = Of<Gamma>(2.5, -1);
+        var sum = law.LogDensity(1);
+        var before = GC.GetAllocatedBytesForCurrentThread();
+        for (var i = 1; i < 1000; i++)
+            sum += law.LogDensity(0.01 * i);
+        Assert.Equal(before, GC.GetAllocatedBytesForCurrentThread());
+        Assert.True(double.IsFinite(sum));
+    }
+
+    [Fact]
     public void A_half_line_may_lie_below_its_end()
     {
         var below = Of<ExponentialBelow>(0.25);
