@@ -87,8 +87,7 @@ internal sealed partial class Expander
         if (sum.IsZero)
             return result;
 
-        // Parts that tie, that depend on x alone and on parameters alone are factors of their own only in the reading;
-        // the term keeps one base e.
+        // One base e for the whole exponent; the separation splits it where the kernel is taken apart.
         return Term.Multiply(result, Term.Of(Formula.E, sum, origin));
     }
 

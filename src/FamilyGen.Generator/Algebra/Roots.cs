@@ -7,7 +7,7 @@ namespace FamilyGen.Generator.Algebra;
 /// <summary>Where a function of x alone changes sign on the support, found on a grid and refined by bisection.</summary>
 internal static class Roots
 {
-    private const int Grid = 4000;
+    private const int Grid = 1000;
     private const int MostRoots = 64;
 
     /// <summary>The sign changes in ascending order; null where the function cannot be evaluated without known values or
@@ -30,7 +30,7 @@ internal static class Roots
                 continue;
             }
 
-            if (before is { } old && Math.Sign(old) * Math.Sign(value) < 0)
+            if (before is { } old && (old < 0) != (value < 0) && value != 0)
                 roots.Add(Exact(Bisect(function, at, x)));
             else if (value == 0)
                 roots.Add(Exact(x));
@@ -47,20 +47,20 @@ internal static class Roots
 
     private static double Bisect(Expression function, double low, double high)
     {
-        var sign = Math.Sign(Value(function, low));
+        var isNegative = Value(function, low) < 0;
         for (var i = 0; i < 200; i++)
         {
             var middle = low + ((high - low) / 2);
             if (middle == low || middle == high)
                 break;
-            var value = Math.Sign(Value(function, middle));
+            var value = Value(function, middle);
             if (value == 0)
             {
                 high = middle;
                 break;
             }
 
-            if (value == sign)
+            if (value < 0 == isNegative)
                 low = middle;
             else
                 high = middle;

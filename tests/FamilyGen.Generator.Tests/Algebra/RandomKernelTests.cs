@@ -54,6 +54,34 @@ public class RandomKernelTests
         Assert.True(refusals > count / 10, $"{refusals} refusals");
     }
 
+    [Theory]
+    [InlineData("half-line", 4)]
+    [InlineData("line", 5)]
+    [InlineData("counts", 6)]
+    public void Any_statistic_has_a_normal_form_that_agrees(string space, int seed)
+    {
+        var random = new Random(seed);
+        for (var i = 0; i < 150; i++)
+        {
+            var text = Free(random, "xxk", 3, space);
+            var family = space switch
+            {
+                "half-line" => FamilyText.Interval("0", known: "k"),
+                "line" => FamilyText.Interval(null, known: "k"),
+                _ => FamilyText.Counts("0", known: "k"),
+            };
+            family.Statistic("A", text);
+            var body = family.Form().Statistics[0].Body;
+            foreach (var x in space switch { "half-line" => s_positive, "line" => s_line, _ => s_counts })
+            {
+                double Value(Symbol s) => s.Kind == SymbolKind.Observation ? x : 1.3;
+                var (expected, actual) = (Evaluator.Evaluate(family.Declaration().Statistics[0].Body, Value), Agreement.Evaluate(body, Value));
+                if (double.IsFinite(expected) && Math.Abs(expected) < 1e6 && double.IsFinite(actual))
+                    Assert.True(Math.Abs(expected - actual) <= 1e-9 * (1 + Math.Abs(expected)), $"{text} at {x}: {expected}, {actual}");
+            }
+        }
+    }
+
     private static string Term(Random random, string space, int depth) =>
         $"{(random.Next(2) == 0 ? Free(random, "abck", depth - 1) : Pick(random, "a", "b", "c", "2", "0.5", "k"))} * {Free(random, random.Next(3) == 0 ? "xak" : "xk", depth, space)}";
 
