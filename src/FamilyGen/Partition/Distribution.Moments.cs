@@ -40,8 +40,8 @@ public sealed partial class Distribution<TKernel>
         var covariance = new double[TKernel.Count, TKernel.Count];
         for (var i = 0; i < TKernel.Count; i++)
         {
-            for (var j = 0; j < TKernel.Count; j++)
-                covariance[i, j] = moments.StatisticCovariance(i, j);
+            for (var j = 0; j <= i; j++)
+                covariance[i, j] = covariance[j, i] = moments.StatisticCovariance(i, j);
         }
 
         return covariance;

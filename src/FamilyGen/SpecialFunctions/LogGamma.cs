@@ -6,7 +6,8 @@ namespace FamilyGen.Special;
 /// <remarks>
 /// On [1, 3] (x − 1)(x − 2) times a polynomial (Chebyshev interpolation, Clenshaw 1962, in 60 digits), so that relative accuracy holds
 /// through the zeros at 1 and 2; below by Γ(x + 1) = xΓ(x), up to 10 by the product (x − 1)(x − 2)… down to [2, 3);
-/// above by Stirling's series (Stirling 1730, de Moivre 1730).
+/// above by Stirling's series (Stirling 1730, de Moivre 1730). At the integers to 23 the logarithm of the factorial, which is
+/// exact there, so that a coefficient such as log(12!) that was worked out elsewhere cancels to 0.
 /// Measured error against 60-digit values at about 10,000 points from 1e-100 to 1e300, extremes included: 2 ulp.
 /// </remarks>
 public static class LogGamma
@@ -31,6 +32,8 @@ public static class LogGamma
             return x == Math.Floor(x) && !double.IsNegativeInfinity(x) ? double.PositiveInfinity : double.NaN;
         if (x < 1)
             return (x * (x - 1) * Polynomial.Horner(Quotient, x - 1)) - Math.Log(x);
+        if (x <= Factorials.Length && x == Math.Floor(x))
+            return Math.Log(Factorials[(int)x - 1]);
         if (x >= 10)
             return double.IsPositiveInfinity(x) ? x : ((x - 0.5) * (Math.Log(x) - 1)) + (HalfLogTwoPiMinusHalf + StirlingTail(x));
         var product = 1.0;
@@ -43,6 +46,14 @@ public static class LogGamma
         var reduced = (x - 1) * (x - 2) * Polynomial.Horner(Quotient, x - 2);
         return product == 1 ? reduced : Math.Log(product) + reduced;
     }
+
+    // 0! to 22!, each a double without rounding
+    private static ReadOnlySpan<double> Factorials =>
+    [
+        1, 1, 2, 6, 24, 120, 720, 5040, 40320, 362880, 3628800, 39916800, 479001600, 6227020800.0, 87178291200.0,
+        1307674368000.0, 20922789888000.0, 355687428096000.0, 6402373705728000.0, 1.21645100408832e+17,
+        2.43290200817664e+18, 5.109094217170944e+19, 1.1240007277776077e+21,
+    ];
 
     private const double HalfLogTwoPiMinusHalf = 0.4189385332046727;
 
