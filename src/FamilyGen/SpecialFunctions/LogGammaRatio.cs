@@ -6,7 +6,8 @@ namespace FamilyGen.Special;
 /// negative binomial coefficient is made of.</summary>
 /// <remarks>From 10 on, Stirling's series of the two, term by term: shift·log x + x(log(1 + z) − z) +
 /// (shift − ½)log(1 + z) + the difference of the tails, z = shift/x; below, both arguments are moved up by
-/// Γ(x + 1) = xΓ(x). Where a negative shift takes most of x the plain difference loses nothing and is taken.</remarks>
+/// Γ(x + 1) = xΓ(x). Where a negative shift takes most of x the plain difference loses nothing and is taken; so is log Γ of an
+/// exact x + shift at the zeros of log Γ(x), where a coefficient that subtracts it again must become 0.</remarks>
 public static class LogGammaRatio
 {
     private const double StirlingFrom = 10;
@@ -22,6 +23,8 @@ public static class LogGammaRatio
     {
         if (!(shift > -0.5 * x))
             return LogGamma.Value(x + shift) - LogGamma.Value(x);
+        if (x is 1 or 2 && x + shift - x == shift)
+            return LogGamma.Value(x + shift);
         var moved = 0.0;
         while (x < StirlingFrom || x + shift < StirlingFrom)
             moved += Elementary.Log1P(shift / x++);
