@@ -5,21 +5,23 @@ using System.Linq;
 namespace FamilyGen.Generator.Algebra;
 
 /// <summary>The coefficients of the statistics found so far, in echelon form over their monomials in the parameters, so that
-/// it can be told whether a further one is α + Σ βᵢθᵢ of them.</summary>
-internal sealed class AffineRelations
+/// it can be told whether a further one is α + Σ βᵢθᵢ of them. With another choice of what a number is it tells the same of
+/// functions of x.</summary>
+/// <param name="numbers">What a factor may depend on to count as a number.</param>
+internal sealed class AffineRelations(Dependence numbers = Dependence.None)
 {
     private readonly List<Row> _rows = new();
 
     /// <summary>α and β of a coefficient that is an affine combination of those added before; null when it is none.</summary>
     public Relation? Find(Polynomial coefficient)
     {
-        var row = Reduce(Row.Of(coefficient));
+        var row = Reduce(Row.Of(coefficient, numbers));
         return row.Entries.Count == 0 ? new Relation(row.Constant, row.Weights.Select(w => w * -1).ToList()) : null;
     }
 
     public void Add(Polynomial coefficient)
     {
-        var row = Reduce(Row.Of(coefficient));
+        var row = Reduce(Row.Of(coefficient, numbers));
         foreach (var other in _rows)
             other.Weights.Add(Polynomial.Zero);
         while (row.Weights.Count < _rows.Count)
@@ -71,13 +73,13 @@ internal sealed class AffineRelations
 
         public List<Polynomial> Weights { get; } = new();
 
-        public static Row Of(Polynomial coefficient)
+        public static Row Of(Polynomial coefficient, Dependence numbers)
         {
             var row = new Row();
             foreach (var term in coefficient.Terms)
             {
-                var scalar = Polynomial.Of(term.Keep(f => f.Dependence == Dependence.None).WithCoefficient(term.Coefficient));
-                var monomial = term.Keep(f => f.Dependence != Dependence.None);
+                var scalar = Polynomial.Of(term.Keep(f => (f.Dependence & ~numbers) == Dependence.None).WithCoefficient(term.Coefficient));
+                var monomial = term.Keep(f => (f.Dependence & ~numbers) != Dependence.None);
                 if (monomial.IsNumber)
                     row.Constant += scalar;
                 else

@@ -20,7 +20,17 @@ internal sealed class AsymptoticExpansion(SupportEnd end, Scope scope, IReadOnly
     /// <summary>Whether the base measure vanishes here.</summary>
     public bool IsExcluded { get; private set; }
 
+    /// <summary>The expansion of a formula; where it cannot be followed but stays between two numbers, no more than that.</summary>
     public AsymptoticSeries Expand(Expression expression)
+    {
+        var series = ExpandAsIs(expression);
+        return series.IsVerified || expression is not (Call or Power or Product) || Dependences.Parts(expression).Any(p => p is Conditional or Opaque)
+            || !scope.RangeOf(expression).IsFinite
+            ? series
+            : Bounded;
+    }
+
+    private AsymptoticSeries ExpandAsIs(Expression expression)
     {
         switch (expression)
         {
@@ -59,6 +69,9 @@ internal sealed class AsymptoticExpansion(SupportEnd end, Scope scope, IReadOnly
         {
             case Function.Exp:
                 return AsymptoticFunctions.Exp(s);
+            case Function.Log when s.IsZero && s.IsVerified && double.IsNegativeInfinity(s.Error):
+                IsExcluded = true;
+                return AsymptoticSeries.Zero;
             case Function.Log:
                 return AsymptoticFunctions.Log(s);
             case Function.LogGamma:

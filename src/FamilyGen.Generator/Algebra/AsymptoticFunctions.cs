@@ -117,8 +117,8 @@ internal static class AsymptoticFunctions
         var sin = AsymptoticSeries.PowerSeries(small, i => i % 2 == 1 ? Alternating((i - 1) / 2, i) : Polynomial.Zero);
         if (limit.IsZero)
             return function == Function.Cos ? cos : sin;
-        var c = Polynomial.Of(Formula.Call(Function.Cos, limit.ToSortedExpression()));
-        var d = Polynomial.Of(Formula.Call(Function.Sin, limit.ToSortedExpression()));
+        var c = AtLimit(Function.Cos, limit);
+        var d = AtLimit(Function.Sin, limit);
         return function == Function.Cos ? (cos * c) - (sin * d) : (sin * c) + (cos * d);
     }
 
@@ -132,6 +132,16 @@ internal static class AsymptoticFunctions
     private static double NextOrder(AsymptoticSeries s) => s.Terms.Count > 1 ? s.Terms[1].OrderEstimate : s.Error;
 
     private static Polynomial Alternating(int n, int factorial) => Polynomial.Of((n % 2 == 0 ? Rational.One : -1) / Factorial(factorial));
+
+    // cos π is −1 and sin π is 0, whatever the rounding of π says.
+    private static Polynomial AtLimit(Function wave, Polynomial limit)
+    {
+        var formula = Formula.Call(wave, limit.ToSortedExpression());
+        if (limit.Dependence != Dependence.None)
+            return Polynomial.Of(formula);
+        var value = AsymptoticTerm.Estimate(Polynomial.Of(formula));
+        return Math.Abs(value - Math.Round(value)) < 1e-14 ? Polynomial.Of((Rational)(int)Math.Round(value)) : Polynomial.Of(formula);
+    }
 
     private static Rational Factorial(int n) => Enumerable.Range(1, n).Aggregate(Rational.One, (product, i) => product * i);
 

@@ -163,6 +163,15 @@ internal sealed class Breakpoints
     {
         if (_scope.Support.IsLattice || _scope.IsPositive(argument) || _scope.IsNegative(argument))
             return;
+        while (argument is Call { Function: Function.Abs } abs)
+            argument = abs.Arguments[0];
+        if (argument is Call { Function: Function.Min or Function.Max } extreme)
+        {
+            foreach (var one in extreme.Arguments)
+                AddSingular(one);
+            return;
+        }
+
         var roots = Affine.In(argument, _scope.Observation.Name) is { } affine && !affine.Slope.IsZero() ? new[] { affine.Root() } : Roots.Of(argument, _scope);
         foreach (var root in roots ?? Array.Empty<Expression>())
         {
@@ -210,6 +219,9 @@ internal sealed class Breakpoints
 
     private void AddFloor(Expression argument)
     {
+        // Nothing is left to cut off.
+        if (argument is Call { Function: Function.Floor or Function.IntegerQuotient })
+            return;
         if (_scope.Support.IsLattice && Affine.In(argument, _scope.Observation.Name) is { Slope: Number { Value: var slope } })
             AddModulus(_scope.Observation, Formula.Of(new Rational(slope.Denominator, 1)));
         else

@@ -133,9 +133,10 @@ internal sealed partial class Expander
 
         if (sign < 0 && rest.Count == 0 && assumed.Count > 0)
         {
-            // Only with a negative parameter is the term positive at all.
-            var factor = positive[assumed[0]];
-            positive[assumed[0]] = new Factor(Sorted(Formula.Negate(factor.Base)), factor.Exponent, factor.Origin);
+            // Only with a negative parameter is the term positive at all; p/(p − 1) is rather p/(1 − p) than −p/(p − 1).
+            var at = assumed.FindIndex(i => positive[i].Base is Sum) is >= 0 and var sum ? assumed[sum] : assumed[0];
+            var factor = positive[at];
+            positive[at] = new Factor(Sorted(Formula.Negate(factor.Base)), factor.Exponent, factor.Origin);
             sign = 1;
         }
 

@@ -32,6 +32,26 @@ internal sealed class NaturalSetSentence(IReadOnlyList<Polynomial> naturals, Exp
         return string.Join("; ", new[] { whole.Text }.Concat(notes.Distinct()).Where(t => t.Length > 0));
     }
 
+    /// <summary>What one end asks for; empty where it asks for nothing, or for the impossible.</summary>
+    public string Condition(EndRow end) => Decide(Levels(end), 0).Text;
+
+    /// <summary>Whether what one end asks for holds in a neighbourhood wherever it holds.</summary>
+    public bool IsOpen(EndRow end) => Decide(Levels(end), 0).IsOpen;
+
+    /// <summary>What its strongest rank asks for at the least: "cubic ≤ 0".</summary>
+    public string Leading(EndRow end)
+    {
+        foreach (var (coefficient, bound) in Levels(end))
+        {
+            if (coefficient.AsRational() is null)
+                return SetCondition.Below(coefficient, bound, SetCondition.Always).Text;
+            if (coefficient.AsRational() != bound)
+                break;
+        }
+
+        return "";
+    }
+
     private SetCondition InRange(Symbol parameter)
     {
         var range = expander.Scope.RangeOf(parameter);

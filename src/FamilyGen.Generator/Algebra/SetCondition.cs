@@ -20,6 +20,9 @@ internal sealed class SetCondition
 
     public bool IsNever { get; }
 
+    /// <summary>Whether no part holds at its bound.</summary>
+    public bool IsOpen => _parts.TrueForAll(p => p.AtBound.IsNever);
+
     private bool IsAlways => !IsNever && _parts.Count == 0;
 
     /// <summary>The condition as text, empty where it always holds.</summary>

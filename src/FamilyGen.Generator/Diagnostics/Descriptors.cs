@@ -50,6 +50,47 @@ internal static class Descriptors
         "A statistic, base measure or kernel is not a pure function",
         "'{0}' depends on '{1}' ({2}), which is {3}, so the same observation need not give the same value twice; use constants, static readonly fields or [Known] values");
 
+    public static readonly DiagnosticDescriptor NotFinite = Error(
+        DiagnosticIds.NotFinite,
+        "A statistic or base measure is not finite somewhere on the support",
+        "'{0}' is not finite at {1}, which can occur: {2}; {3}");
+
+    public static readonly DiagnosticDescriptor Dependent = Error(
+        DiagnosticIds.Dependent,
+        "The statistics are affinely dependent",
+        "{0} on the whole support, so the parameters of these statistics cannot be told apart; {1}");
+
+    public static readonly DiagnosticDescriptor IntegerArithmetic = Warning(
+        DiagnosticIds.IntegerArithmetic,
+        "Integer arithmetic truncates or can overflow",
+        "'{0}' is computed in {1} and {2}; {3}");
+
+    public static readonly DiagnosticDescriptor Measure = Error(
+        DiagnosticIds.Measure,
+        "The base measure is negative, or zero everywhere",
+        "'{0}' {1}; {2}");
+
+    public static readonly DiagnosticDescriptor InfiniteNormalizer = Error(
+        DiagnosticIds.InfiniteNormalizer,
+        "The normalizer is infinite for every parameter",
+        "The normalizer is infinite for every parameter: {0}; {1}");
+
+    public static readonly DiagnosticDescriptor Unproved = Warning(
+        DiagnosticIds.Unproved,
+        "Finiteness or smoothness cannot be proved",
+        "{0}, so it cannot be proved {1}; {2}");
+
+    public static readonly DiagnosticDescriptor NotOpen = Describe(
+        DiagnosticIds.NotOpen,
+        "The parameter set is not open",
+        "The set of parameters with a finite normalizer is not open: it asks {0}; the maximum of a likelihood may lie on that boundary",
+        DiagnosticSeverity.Info);
+
+    public static readonly DiagnosticDescriptor NoInterior = Error(
+        DiagnosticIds.NoInterior,
+        "The parameter set has no interior",
+        "The normalizer is finite only where {0}, which leaves nothing to estimate: {1}; {2}");
+
     public static readonly DiagnosticDescriptor NotSeparable = Error(
         DiagnosticIds.NotSeparable,
         "The kernel does not separate",
@@ -70,7 +111,7 @@ internal static class Descriptors
     public static ImmutableArray<DiagnosticDescriptor> All { get; } =
     [
         Shape, NameCollision, NearlyEqualKnown, SupportOnParameter, SupportChanges, SupportEmpty, StatisticOnParameter, Impure,
-        NotSeparable, Curved, NotIdentified,
+        NotFinite, Dependent, IntegerArithmetic, Measure, InfiniteNormalizer, Unproved, NotOpen, NoInterior, NotSeparable, Curved, NotIdentified,
     ];
 
     /// <summary>By id.</summary>

@@ -11,6 +11,14 @@ internal static class DiagnosticIds
     public const string SupportEmpty = "FG0103";
     public const string StatisticOnParameter = "FG0201";
     public const string Impure = "FG0202";
+    public const string NotFinite = "FG0203";
+    public const string Dependent = "FG0204";
+    public const string IntegerArithmetic = "FG0205";
+    public const string Measure = "FG0301";
+    public const string InfiniteNormalizer = "FG0401";
+    public const string Unproved = "FG0403";
+    public const string NotOpen = "FG0405";
+    public const string NoInterior = "FG0406";
     public const string NotSeparable = "FG0501";
     public const string Curved = "FG0502";
     public const string NotIdentified = "FG0503";

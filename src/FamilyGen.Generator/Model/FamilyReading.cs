@@ -1,3 +1,5 @@
+using FamilyGen.Generator.Algebra;
+
 namespace FamilyGen.Generator.Model;
 
 /// <summary>What a declared member is for.</summary>
@@ -69,6 +71,26 @@ internal enum NamedPieceKind
 /// <summary>A name in the declaration that may collide with another; <paramref name="Detail"/> is a known value's type.</summary>
 internal sealed record NamedPiece(string Name, NamedPieceKind Kind, int Origin, string Detail = "");
 
+internal enum IntegerStepKind
+{
+    /// <summary>A division that drops the fraction.</summary>
+    Quotient,
+
+    /// <summary>A product, which may overflow.</summary>
+    Product,
+
+    /// <summary>A conversion of a real number, which drops the fraction.</summary>
+    Conversion,
+}
+
+/// <summary>Arithmetic that C# does in integers, in a place where a number goes into a formula.</summary>
+/// <param name="Kind">What is done.</param>
+/// <param name="Type">The integer type, as a C# keyword.</param>
+/// <param name="Left">The first operand.</param>
+/// <param name="Right">The second operand; of a conversion the operand once more.</param>
+/// <param name="Origin">Where it stands.</param>
+internal sealed record IntegerStep(IntegerStepKind Kind, string Type, Expression Left, Expression Right, int Origin);
+
 /// <summary>All that was read of one declaration, valid or not: plain data, equal when the source says the same.</summary>
 /// <param name="Declaration">The declaration as far as it could be read.</param>
 /// <param name="CanBeCompleted">Whether code can be added to the class at all (partial, not generic, a class …).</param>
@@ -83,4 +105,8 @@ internal sealed record FamilyReading(
     bool IsReadable,
     EquatableArray<Finding> Faults,
     EquatableArray<Dependency> Dependencies,
-    EquatableArray<NamedPiece> Names);
+    EquatableArray<NamedPiece> Names)
+{
+    /// <summary>Where statistics, base measure and kernel are computed in integers.</summary>
+    public EquatableArray<IntegerStep> IntegerSteps { get; init; } = EquatableArray<IntegerStep>.Empty;
+}

@@ -35,7 +35,7 @@ internal static class FamilyReader
         var declaration = new DeclarationReader(session, members).Read();
         declaration = NamesInUse.Collect(session, declaration);
         var reading = new FamilyReading(
-            declaration, canBeCompleted, session.IsReadable, session.Faults, session.Dependencies, session.Names);
+            declaration, canBeCompleted, session.IsReadable, session.Faults, session.Dependencies, session.Names) { IntegerSteps = session.IntegerSteps };
         return (reading, session.Locations.ToImmutableArray());
     }
 }

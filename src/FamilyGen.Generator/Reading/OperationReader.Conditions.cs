@@ -8,7 +8,18 @@ namespace FamilyGen.Generator.Reading;
 /// <content>Yes/no questions and patterns.</content>
 internal sealed partial class OperationReader
 {
+    // How deep in conditions the reader stands.
+    private int _conditions;
+
     private Condition ReadCondition(IOperation operation, Scope scope)
+    {
+        _conditions++;
+        var condition = ReadConditionItself(operation, scope);
+        _conditions--;
+        return condition;
+    }
+
+    private Condition ReadConditionItself(IOperation operation, Scope scope)
     {
         if (IsBroken(operation))
         {

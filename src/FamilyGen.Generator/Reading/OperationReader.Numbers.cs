@@ -1,6 +1,7 @@
 using System.Linq;
 using FamilyGen.Generator.Algebra;
 using FamilyGen.Generator.Diagnostics;
+using FamilyGen.Generator.Model;
 using Microsoft.CodeAnalysis;
 using Microsoft.CodeAnalysis.Operations;
 
@@ -16,7 +17,11 @@ internal sealed partial class OperationReader
         if (!MayDescend(operation))
             return Placeholder(-1);
         if (ConstantNumber.TryRead(operation, session.Mark(operation.Syntax)) is { } constant)
+        {
+            NoteConstantQuotients(operation);
             return constant;
+        }
+
         return operation switch
         {
             IParenthesizedOperation parenthesized => ReadNumber(parenthesized.Operand, scope),
@@ -63,7 +68,9 @@ internal sealed partial class OperationReader
 
         var left = ReadNumber(binary.LeftOperand, scope);
         var right = ReadNumber(binary.RightOperand, scope);
-        return Combine(FormulaAt(binary), binary.OperatorKind, left, right, IsIntegral(binary.Type));
+        var result = Combine(FormulaAt(binary), binary.OperatorKind, left, right, IsIntegral(binary.Type));
+        NoteIntegers(binary.OperatorKind, binary.Type, left, right, result.Origin);
+        return result;
     }
 
     private static Expression Combine(PlacedFormula formula, BinaryOperatorKind kind, Expression a, Expression b, bool isIntegral) => kind switch
@@ -90,9 +97,14 @@ internal sealed partial class OperationReader
         // Towards integers the fraction is cut off; towards float digits are lost, which no formula says. A conversion
         // between integers is taken to fit.
         if (IsIntegral(to) && !IsIntegral(from))
+        {
+            if (!conversion.IsImplicit)
+                NoteStep(IntegerStepKind.Conversion, to!, operand, operand, session.Mark(conversion.Syntax));
             return FormulaAt(conversion).Truncate(operand);
+        }
+
         return to?.SpecialType == SpecialType.System_Single && from?.SpecialType == SpecialType.System_Double
-            ? new Opaque("(double)(float)({0})", Model.EquatableArray.Of(operand)) { Origin = session.Mark(conversion.Syntax) }
+            ? new Opaque("(double)(float)({0})", EquatableArray.Of(operand)) { Origin = session.Mark(conversion.Syntax) }
             : operand;
     }
 

@@ -97,7 +97,10 @@ internal sealed partial class OperationReader
                     or BinaryOperatorKind.Divide or BinaryOperatorKind.Remainder:
                 // The operation is done in the type that both operands are brought to: an int divided by a double is real.
                 var isIntegral = IsIntegral(compound.Type) && IsIntegral(compound.Value.Type);
-                var result = Combine(FormulaAt(compound), compound.OperatorKind, ReadNumber(target, scope), ReadNumber(compound.Value, scope), isIntegral);
+                var (left, right) = (ReadNumber(target, scope), ReadNumber(compound.Value, scope));
+                var result = Combine(FormulaAt(compound), compound.OperatorKind, left, right, isIntegral);
+                if (isIntegral)
+                    NoteIntegers(compound.OperatorKind, compound.Type, left, right, result.Origin);
                 if (IsIntegral(compound.Type) && !isIntegral)
                     result = FormulaAt(compound).Truncate(result);
                 return scope.With(variable, Bounded(new NumberValue(result), compound));

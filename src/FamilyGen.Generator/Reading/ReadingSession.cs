@@ -19,6 +19,7 @@ internal sealed class ReadingSession(Compilation compilation, INamedTypeSymbol f
     private readonly List<Finding> _faults = [];
     private readonly List<Dependency> _dependencies = [];
     private readonly List<NamedPiece> _names = [];
+    private readonly List<IntegerStep> _integerSteps = [];
     private readonly List<string> _path = [];
     private readonly List<ISymbol> _followed = [];
 
@@ -46,6 +47,8 @@ internal sealed class ReadingSession(Compilation compilation, INamedTypeSymbol f
     public EquatableArray<Dependency> Dependencies => _dependencies.ToEquatableArray();
 
     public EquatableArray<NamedPiece> Names => _names.ToEquatableArray();
+
+    public EquatableArray<IntegerStep> IntegerSteps => _integerSteps.Distinct().ToEquatableArray();
 
     public int DependencyCount => _dependencies.Count;
 
@@ -79,6 +82,13 @@ internal sealed class ReadingSession(Compilation compilation, INamedTypeSymbol f
     {
         var path = _path.LastOrDefault() == name ? _path : _path.Append(name);
         _dependencies.Add(new Dependency(kind, Role, _path.FirstOrDefault() ?? name, name, reason, origin, path.ToEquatableArray()));
+    }
+
+    /// <summary>Takes down a step that is computed in integers, unless it only says which observations can occur.</summary>
+    public void Note(IntegerStep step)
+    {
+        if (Role != MemberRole.Support)
+            _integerSteps.Add(step);
     }
 
     /// <summary>Starts on a declared member.</summary>

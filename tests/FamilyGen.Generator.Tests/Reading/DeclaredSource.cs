@@ -2,6 +2,7 @@ using System.Collections.Immutable;
 using System.Linq;
 using System.Threading;
 using Basic.Reference.Assemblies;
+using FamilyGen.Generator.Diagnostics;
 using FamilyGen.Generator.Model;
 using FamilyGen.Generator.Reading;
 using FamilyGen.Generator.Verdicts;
@@ -61,16 +62,17 @@ internal static class DeclaredSource
     public static (FamilyReading Reading, ImmutableArray<Location> Locations) Read(Compilation compilation) =>
         FamilyReader.Read(compilation, Family(compilation), CancellationToken.None);
 
-    /// <summary>A declaration that reads without any finding.</summary>
+    /// <summary>A declaration in which the reader sees nothing wrong.</summary>
     public static FamilyDeclaration ReadValid(params string[] sources)
     {
         var (reading, _) = Read(sources);
         Assert.True(reading.IsReadable);
-        Assert.Empty(Judgement.Of(reading).Findings);
+        Assert.Empty(reading.Faults);
+        Assert.Empty(reading.Dependencies);
         return reading.Declaration;
     }
 
-    /// <summary>The findings as "FG0101 at `shape`", which generator and analyzer must agree on.</summary>
+    /// <summary>The errors and warnings as "FG0101 at `shape`", which generator and analyzer must agree on.</summary>
     public static string[] Findings(params string[] sources)
     {
         var compilation = Compile(sources);
@@ -82,7 +84,10 @@ internal static class DeclaredSource
     private static string[] Places(Compilation compilation)
     {
         var (reading, locations) = Read(compilation);
-        return Judgement.Of(reading).Findings.Select(f => f.Id + " at `" + Text(locations[f.Origin]) + "`").ToArray();
+        return Judgement.Of(reading).Findings
+            .Where(f => Descriptors.ById[f.Id].DefaultSeverity > DiagnosticSeverity.Info)
+            .Select(f => f.Id + (f.Origin < 0 ? " at the class" : " at `" + Text(locations[f.Origin]) + "`"))
+            .ToArray();
     }
 
     /// <summary>The formula that a body of the given text is read as, with an observation x of the type.</summary>

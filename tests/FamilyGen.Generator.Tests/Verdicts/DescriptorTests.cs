@@ -43,21 +43,31 @@ public class DescriptorTests
     [InlineData("FG0103", "[Support] static CountRange Range => CountRange.Between(5, {|FG0103:3|}); [SufficientStatistic] static double Total(int x) => x;")]
     [InlineData("FG0201", "[Support] static CountRange Range => CountRange.From(0); [SufficientStatistic] static double Total(int x, double {|FG0201:rate|}) => x * rate;")]
     [InlineData("FG0202", "[Support] static CountRange Range => CountRange.From(0); [SufficientStatistic] static double Total(int x) => x * {|FG0202:DateTime.Now|}.Hour;")]
+    [InlineData("FG0203", "[Support] static CountRange Range => CountRange.From(0); [SufficientStatistic] static double LogTotal(int x) => -{|FG0203:Log(x)|};")]
+    [InlineData("FG0204", "[Support] static CountRange Range => CountRange.Between(1, 2); [SufficientStatistic] static double Total(int x) => x; [SufficientStatistic] static double LogTotal(int x) => {|FG0204:Log(x)|};")]
+    [InlineData("FG0205", "[Support] static CountRange Range => CountRange.From(0); [SufficientStatistic] static double Half(int x) => -({|FG0205:x / 2|});")]
+    [InlineData("FG0301", "[Support] static CountRange Range => CountRange.From(0); [SufficientStatistic] static double Total(int x) => x; [BaseMeasure] static double Weight(int x) => {|FG0301:1 - x|};")]
+    [InlineData("FG0401", "[Support] static CountRange Range => CountRange.AllIntegers; [SufficientStatistic] static double Total(int x) => x;")]
+    [InlineData("FG0403", "[Support] static CountRange Range => CountRange.Between(0, 5); [SufficientStatistic] static double Rounded(int x) => {|FG0403:Round(x * 1.5)|};")]
+    [InlineData("FG0405", "[Support] static CountRange Range => CountRange.From(0); [SufficientStatistic] static double Total(int x) => x; [SufficientStatistic] static double Crowding(int x) => -FactorialLn(x);")]
+    [InlineData("FG0406", "[Support] static Interval Range => Interval.RealLine; [SufficientStatistic] static double Spread(double x) => x * x; [SufficientStatistic] static double Skew(double x) => {|FG0406:x * x * x|};")]
     [InlineData("FG0501", "[Support] static CountRange Range => CountRange.From(1); [LogKernel] static double Kernel(int x, double power) => -{|FG0501:Pow(x, power)|};")]
     [InlineData("FG0502", "[Support] static CountRange Range => CountRange.From(1); [LogKernel] static double Kernel(int x, double pace) => {|FG0502:-pace * x - pace * pace * Log(x)|};")]
     [InlineData("FG0503", "[Support] static CountRange Range => CountRange.From(1); [LogKernel] static double Kernel(int x, double {|FG0503:rate|}, double factor) => -rate * factor * x;")]
     public Task InTheHarness(string id, string members)
     {
-        Assert.Contains(id, members);
         var test = new CSharpAnalyzerTest<FamilyAnalyzer, DefaultVerifier>
         {
-            TestCode = DeclaredSource.Usings + "[Family] public partial class ShiftStoppages { " + members + " }",
+            TestCode = DeclaredSource.Usings + "[Family] public partial class " + ClassName(id) + " { " + members + " }",
             ReferenceAssemblies = new ReferenceAssemblies("net10.0"),
             CompilerDiagnostics = CompilerDiagnostics.None,
         };
         test.TestState.AdditionalReferences.AddRange(DeclaredSource.References);
         return test.RunAsync();
     }
+
+    // What is said of the parameter set is said of the whole class.
+    private static string ClassName(string id) => id is "FG0401" or "FG0405" ? "{|" + id + ":ShiftStoppages|}" : "ShiftStoppages";
 
     private static string Root([CallerFilePath] string here = "") =>
         Path.GetFullPath(Path.Combine(Path.GetDirectoryName(here)!, "..", "..", ".."));
