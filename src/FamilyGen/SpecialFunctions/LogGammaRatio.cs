@@ -21,9 +21,7 @@ public static class LogGammaRatio
     /// <summary>log Γ(x + shift) − log Γ(x).</summary>
     public static double Value(double x, double shift)
     {
-        // At the first arguments a shift of size loses nothing either, and log Γ(1 + shift) − log Γ(1) is then log Γ(1 + shift)
-        // to the bit: a coefficient that starts at 1 has logarithm 0.
-        if (!(shift > -0.5 * x) || (x < 3 && shift is >= 0.5 and < 100))
+        if (!(shift > -0.5 * x))
             return LogGamma.Value(x + shift) - LogGamma.Value(x);
         if (x is 1 or 2 && x + shift - x == shift)
             return LogGamma.Value(x + shift);
