@@ -37,6 +37,12 @@ internal static class MomentMerge
                 AddBetween(means[i], mean, plan, partition.Shares[i], covariance);
         }
 
+        for (var i = 0; i < size; i++)
+        {
+            for (var j = 0; j < i; j++)
+                covariance[j, i] = covariance[i, j];
+        }
+
         MarkInfinite(plan, mean, covariance);
         return new(main.Expansion.Reference, EffectiveSlopes(main, plan), main.Expansion.Values.ToArray(), mean, covariance, partition.LogValue.Value);
     }
