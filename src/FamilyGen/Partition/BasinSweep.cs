@@ -24,6 +24,7 @@ internal sealed class BasinSweep<TKernel>
     private readonly bool _termByTerm;
     private readonly double _step;
     private readonly int _quiet;
+    private readonly MomentTail<TKernel> _momentTail;
     private int _panels;
 
     /// <summary>Sweeps a basin.</summary>
@@ -35,6 +36,7 @@ internal sealed class BasinSweep<TKernel>
     public BasinSweep(Expansion<TKernel> expansion, Basin basin, bool termByTerm, MomentPlan plan, IPanelSink? sink)
     {
         _panel = new PanelSum<TKernel>(expansion, plan);
+        _momentTail = new MomentTail<TKernel>(_panel, plan, expansion.Frame.Chart.Kind);
         _sink = sink;
         _termByTerm = termByTerm;
         _step = basin.Piece.Step;
@@ -100,6 +102,13 @@ internal sealed class BasinSweep<TKernel>
             var size = Math.Min(width, end - start);
             if (start + size == start)
                 break;
+            if (_momentTail.IsReached(origin, start, ref size, direction))
+            {
+                if (quiet == 0)
+                    _momentTail.Complete(origin, start, direction, Total);
+                break;
+            }
+
             var excess = _panel.Apply(QuadratureRule.Interval, origin + direction * (start + size / 2), direction * size / 2, size, Total);
             if (excess > 1)
             {

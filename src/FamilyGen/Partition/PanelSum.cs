@@ -50,6 +50,9 @@ internal sealed class PanelSum<TKernel>
         return log;
     }
 
+    /// <summary>The basis functions at the offset that was looked at last.</summary>
+    public ReadOnlySpan<double> Basis => _basis;
+
     /// <summary>The residuals at the offset that was looked at last.</summary>
     public ReadOnlySpan<double> Residuals => _residual;
 

@@ -72,6 +72,14 @@ internal sealed class Sums
         }
     }
 
+    /// <summary>Adds to the sum of bᵢbⱼ, j ≤ i, alone.</summary>
+    public void AddProduct(int i, int j, double value)
+    {
+        Second[(i * (i + 1) / 2) + j] += value;
+        if (i == j)
+            Scale[i] += value;
+    }
+
     /// <summary>Adds other sums times a measure.</summary>
     public void Add(Sums other, double measure)
     {
