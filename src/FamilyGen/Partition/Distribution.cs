@@ -122,12 +122,10 @@ public sealed partial class Distribution<TKernel>
         if (x <= _domain.Lower ? !_domain.LowerIncluded || x < _domain.Lower : x >= _domain.Upper && (!_domain.UpperIncluded || x > _domain.Upper))
             return -1;
 
-        // pieces keep one double away from breakpoints
-        var (above, below) = (Math.BitIncrement(x), Math.BitDecrement(x));
         for (var i = 0; i < parts.Length; i++)
         {
             ref readonly var basin = ref parts[i].BasinReference;
-            if (basin.Piece.Step == 0 && above >= basin.Lower && below <= basin.Upper)
+            if (basin.Piece.Step == 0 && x >= basin.Lower && x <= basin.Upper)
                 return i;
         }
 

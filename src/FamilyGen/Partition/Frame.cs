@@ -20,8 +20,18 @@ internal readonly struct Frame
     private readonly double _logShareAbove;
     private readonly double _logShareBelow;
 
+    // between which observations lie, for conditions to see
+    private readonly double _innerLower;
+    private readonly double _innerUpper;
+
     public Frame(Chart chart, Point reference)
+        : this(chart, reference, double.NegativeInfinity, double.PositiveInfinity)
     {
+    }
+
+    public Frame(Chart chart, Point reference, double innerLower, double innerUpper)
+    {
+        (_innerLower, _innerUpper) = (innerLower, innerUpper);
         _chart = chart;
         _kind = chart.Kind;
         Reference = reference;
@@ -87,7 +97,7 @@ internal readonly struct Frame
 
         return new Point
         {
-            X = x,
+            X = x < _innerLower ? _innerLower : x > _innerUpper ? _innerUpper : x,
             Displacement = displacement,
             RatioToLower = toLower,
             RatioToUpper = toUpper,

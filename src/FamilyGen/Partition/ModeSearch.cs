@@ -94,16 +94,13 @@ internal readonly ref struct ModeSearch<TKernel>
 
     private Point ModePoint(Piece piece, double mode)
     {
-        // A breakpoint itself may have the functions of either neighbour: the reference point lies just inside.
-        var breakpoints = _kernel.Domain.Breakpoints;
-        var first = breakpoints.Contains(piece.Lower) ? Math.BitIncrement(piece.Lower) : piece.Lower;
-        var last = breakpoints.Contains(piece.Upper) ? Math.BitDecrement(piece.Upper) : piece.Upper;
-        if (mode <= _chart.CoordinateOf(first))
-            return _chart.Reference(first);
-        if (mode >= _chart.CoordinateOf(last))
-            return _chart.Reference(last);
+        var (lower, upper) = (Math.Max(piece.Lower, piece.InnerLower), Math.Min(piece.Upper, piece.InnerUpper));
+        if (mode <= _chart.CoordinateOf(lower))
+            return _chart.Reference(lower);
+        if (mode >= _chart.CoordinateOf(upper))
+            return _chart.Reference(upper);
         var m = _chart.ReferenceNear(mode);
-        return m.X < first ? _chart.Reference(first) : m.X > last ? _chart.Reference(last) : m;
+        return m.X < lower ? _chart.Reference(lower) : m.X > upper ? _chart.Reference(upper) : m;
     }
 
     // The member of the piece's residue class at or below x.
@@ -130,7 +127,7 @@ internal readonly ref struct ModeSearch<TKernel>
         var inside = _chart.IsLattice
             ? new Point { X = piece.Integer }
             : _chart.ReferenceNear(Inner(from, to, 0.5));
-        return new(_kernel, _theta, _chart, inside with { Integer = piece.Integer });
+        return new(_kernel, _theta, _chart, piece, inside with { Integer = piece.Integer });
     }
 
     private static double Inner(double from, double to, double share)
@@ -153,7 +150,7 @@ internal readonly ref struct ModeSearch<TKernel>
 
     private void AddLargestTerm(Piece piece, List<Basin> basins)
     {
-        var field = new SlopeField<TKernel>(_kernel, _theta, _chart, new Point { X = piece.Integer, Integer = piece.Integer });
+        var field = new SlopeField<TKernel>(_kernel, _theta, _chart, piece, new Point { X = piece.Integer, Integer = piece.Integer });
         var (best, height) = (double.NaN, double.NegativeInfinity);
         for (var x = piece.Lower; x <= piece.Upper; x += piece.Step)
         {

@@ -13,6 +13,13 @@ namespace FamilyGen.Partition;
 /// <param name="Step">On a lattice the distance between neighbours; 0 on an interval.</param>
 internal readonly record struct Piece(double Lower, double Upper, long Integer, double Step)
 {
+    /// <summary>The least observation by which conditions are decided. A condition may count a breakpoint to either side, and
+    /// a point that carries probability of its own stands for itself: they are looked at from one double away.</summary>
+    public double InnerLower { get; init; } = double.NegativeInfinity;
+
+    /// <summary>The greatest observation by which conditions are decided.</summary>
+    public double InnerUpper { get; init; } = double.PositiveInfinity;
+
     /// <summary>The number of lattice points, possibly infinite.</summary>
     public double Count => (Upper - Lower) / Step + 1;
 
@@ -27,28 +34,22 @@ internal readonly record struct Piece(double Lower, double Upper, long Integer, 
         return pieces;
     }
 
-    // A condition may count the breakpoint itself to either side, and a point that carries probability of its own stands
-    // for itself: pieces keep one double away from both.
     private static void AddIntervals(Domain domain, SubRange range, List<Piece> pieces)
     {
         var lower = Math.Max(domain.Lower, range.Lower);
         var upper = Math.Min(domain.Upper, range.Upper);
+        var inner = double.NegativeInfinity;
         foreach (var point in domain.Breakpoints.Union(domain.Masses).Order())
         {
             if (point < lower || point > upper)
                 continue;
             if (point > lower)
-                AddInterval(lower, Math.BitDecrement(point), pieces);
-            lower = Math.BitIncrement(point);
+                pieces.Add(new(lower, point, 0, 0) { InnerLower = inner, InnerUpper = Math.BitDecrement(point) });
+            (lower, inner) = (point, Math.BitIncrement(point));
         }
 
-        AddInterval(lower, upper, pieces);
-    }
-
-    private static void AddInterval(double lower, double upper, List<Piece> pieces)
-    {
         if (lower < upper)
-            pieces.Add(new(lower, upper, 0, 0));
+            pieces.Add(new(lower, upper, 0, 0) { InnerLower = inner });
     }
 
     private static void AddLattice(Domain domain, SubRange range, List<Piece> pieces)

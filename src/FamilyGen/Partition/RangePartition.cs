@@ -124,19 +124,20 @@ internal sealed class RangePartition<TKernel>
     // The expansion about the basin's mode, or just inside where the exponent has no tangent at an edge.
     private static Expansion<TKernel> About(TKernel kernel, double[] theta, Chart chart, Basin basin)
     {
+        Frame FrameAt(Point m) => new(chart, m, basin.Piece.InnerLower, basin.Piece.InnerUpper);
         var integer = basin.Piece.Step > 0 ? Frame.ToInteger(basin.Mode.X) : 0;
-        var expansion = new Expansion<TKernel>(kernel, theta, new Frame(chart, basin.Mode), integer);
+        var expansion = new Expansion<TKernel>(kernel, theta, FrameAt(basin.Mode), integer);
         if (expansion.IsUsable || basin.Piece.Step > 0 || !(basin.Lower < basin.Upper))
             return expansion;
         if (chart.Kind is Coordinate.AboveLower or Coordinate.Between && Math.Abs(basin.Mode.LogAboveLower) > FarthestLog)
-            return new Expansion<TKernel>(kernel, theta, new Frame(chart, chart.ReferenceNear(Math.CopySign(FarthestLog, basin.Mode.LogAboveLower))), 0);
+            return new Expansion<TKernel>(kernel, theta, FrameAt(chart.ReferenceNear(Math.CopySign(FarthestLog, basin.Mode.LogAboveLower))), 0);
         if (chart.Kind is Coordinate.BelowUpper or Coordinate.Between && Math.Abs(basin.Mode.LogBelowUpper) > FarthestLog)
-            return new Expansion<TKernel>(kernel, theta, new Frame(chart, chart.ReferenceNear(-Math.CopySign(FarthestLog, basin.Mode.LogBelowUpper))), 0);
+            return new Expansion<TKernel>(kernel, theta, FrameAt(chart.ReferenceNear(-Math.CopySign(FarthestLog, basin.Mode.LogBelowUpper))), 0);
         var width = double.IsFinite(basin.Upper - basin.Lower) ? basin.Upper - basin.Lower : 1;
         for (var part = 1e-9; part < 1; part *= 10)
         {
             var x = basin.Mode.X <= basin.Lower ? basin.Lower + part * width : basin.Upper - part * width;
-            var inside = new Expansion<TKernel>(kernel, theta, new Frame(chart, chart.Reference(x)), 0);
+            var inside = new Expansion<TKernel>(kernel, theta, FrameAt(chart.Reference(x)), 0);
             if (inside.IsUsable)
                 return inside;
         }

@@ -11,13 +11,15 @@ internal readonly ref struct SlopeField<TKernel>
     private readonly TKernel _kernel;
     private readonly ReadOnlySpan<double> _theta;
     private readonly Chart _chart;
+    private readonly Piece _piece;
     private readonly Point _representative;
 
-    public SlopeField(TKernel kernel, ReadOnlySpan<double> theta, Chart chart, Point representative)
+    public SlopeField(TKernel kernel, ReadOnlySpan<double> theta, Chart chart, Piece piece, Point representative)
     {
         _kernel = kernel;
         _theta = theta;
         _chart = chart;
+        _piece = piece;
         _representative = representative;
     }
 
@@ -59,7 +61,10 @@ internal readonly ref struct SlopeField<TKernel>
         var count = TKernel.Count;
         Span<double> value = stackalloc double[count + 1];
         Span<double> remainder = stackalloc double[count + 1];
-        var m = _chart.ReferenceNear(u) with { Integer = _representative.Integer };
+        var m = _chart.ReferenceNear(u);
+        if (m.X < _piece.InnerLower || m.X > _piece.InnerUpper)
+            m = _chart.Reference(Math.Clamp(m.X, _piece.InnerLower, _piece.InnerUpper));
+        m = m with { Integer = _representative.Integer };
         _kernel.Evaluate(m, value, remainder);
         var sum = value[count] + new Frame(_chart, m).LogJacobianAtReference;
         for (var j = 0; j < count; j++)

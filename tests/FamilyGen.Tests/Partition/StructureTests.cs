@@ -177,7 +177,6 @@ public class StructureTests
         Near(theta[0] * Math.Log(50) + 1 - loss.LogNormalizer, loss.LogDensity(50), 1e-13);
         Near(theta[2] + theta[3] * Math.Log(100) - loss.LogNormalizer, loss.LogDensity(100), 1e-13);
         Near(tail / (body + tail), loss.Survival(100), 1e-9);
-        Near(tail / (body + tail), loss.Survival(Math.BitDecrement(100)), 1e-9);
         Near(loss.Cdf(100), Math.Exp(loss.LogProbability(SubRange.UpTo(100))), 1e-12);
     }
 
