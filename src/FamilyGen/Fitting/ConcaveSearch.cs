@@ -27,20 +27,26 @@ internal sealed record SearchOutcome<TKernel>(
 
 /// <summary>Newton's method for the likelihood in the natural parameters, where it is concave, so that the one maximum is
 /// found from anywhere or shown to be missing.</summary>
-/// <remarks>A step is kept inside the walls of the parameter set and shortened until the slope along it has not turned
-/// further than it may; differences of the likelihood itself, which rounding drowns near the maximum, are asked only where
-/// they are large. A wall that stops a full step and whose points belong to the set is tried as a face: its maximum is the
-/// answer when the likelihood would rise beyond the wall (the Karush–Kuhn–Tucker conditions, sufficient by concavity); if
-/// not, the maximum is elsewhere and that wall is never tried again.</remarks>
+/// <remarks>A step that would cross a wall of the parameter set goes along it instead. It is shortened until the slope along
+/// it has not turned further than it may; differences of the likelihood itself, which rounding drowns near the maximum, are
+/// asked only where they are large. A wall whose points belong to the set is tried as a face: its maximum is the answer when
+/// the likelihood would rise beyond the wall (the Karush–Kuhn–Tucker conditions, sufficient by concavity); if not, the maximum
+/// is inside.</remarks>
 internal sealed class ConcaveSearch<TKernel>(StatisticSums<TKernel> sums)
     where TKernel : struct, IKernel
 {
-    private const int MaximalSteps = 200;
+    private const int MaximalSteps = 300;
     private const int StepsThatProveDivergence = 40;
     private const double Converged = 1e-14;
 
     // Where θ itself has too few digits for the decrement to become small, it stands still at the size of their rounding.
     private const int MaximalStandstill = 6;
+    private const double LargestRounding = 1e-3;
+
+    // A free step ends short of a wall, and a step along a wall goes this part of the way to it.
+    private const double NearestPart = 0.9;
+    private const double WallPart = 0.8;
+    private const double LongestStep = 1024;
 
     // Below this decrement the law is quadratic to within rounding if it is near a maximum at all.
     private const double Quadratic = 1e-5;
@@ -61,35 +67,31 @@ internal sealed class ConcaveSearch<TKernel>(StatisticSums<TKernel> sums)
     private SearchOutcome<TKernel> Climb(ModelPoint<TKernel> point, Face face)
     {
         var path = new List<double[]> { point.Theta };
-        var tried = new HashSet<Wall>();
+        var trials = new Dictionary<Wall, int>();
         string? reason = null;
         var best = (Point: point, Decrement: double.PositiveInfinity);
-        var (isSteady, sinceBest) = (false, 0);
-        var unsteady = 0;
+        var (isSteady, sinceBest, unsteady) = (false, 0, 0);
         for (var steps = 0; steps < MaximalSteps && unsteady < StepsThatProveDivergence; steps++)
         {
-            if (NewtonStep.TryFrom(point, face) is not { } step)
+            if (NewtonSystem<TKernel>.TryAt(point, face) is not { } system)
                 break;
-            var isLower = step.Decrement < 0.25 * best.Decrement;
-            sinceBest = isLower ? 0 : sinceBest + 1;
-            if (step.Decrement < best.Decrement)
-                best = (point, step.Decrement);
-            if (isSteady && (best.Decrement <= Converged || (sinceBest > 0 && best.Decrement < Quadratic) || sinceBest > MaximalStandstill))
+            sinceBest = system.Decrement < 0.25 * best.Decrement ? 0 : sinceBest + 1;
+            if (system.Decrement < best.Decrement)
+                best = (point, system.Decrement);
+            if (isSteady && IsConverged(best.Decrement, sinceBest))
                 return new(best.Point, face, Multipliers(best.Point, face), path, _iterations, false, null);
 
-            var (room, wall) = Room(face, point.Theta, step.Change);
-            if (room < 1 && wall is not null && face.CanHold(wall) && tried.Add(wall)
-                && OnFace(face.With(wall), point, step, room) is { } held)
-            {
+            var (step, walls) = StepInside(system, face, point.Theta);
+            if (walls.Count > 0 && IsDueTrial(walls[0], step, trials, face) && OnFace(face.With(walls[0]), walls[0], point, system) is { } held)
                 return held;
-            }
 
-            var (next, length) = LineSearch(point, step, room, out reason);
+            var limit = walls.Count > 0 ? 1 : Math.Min(LongestStep, NearestPart * Room(face, point.Theta, step.Change, walls).Room);
+            var (next, length) = LineSearch(point, step, limit, system.Decrement < Quadratic, out reason);
             if (next is null)
                 break;
             var ratio = next.CurvatureAlong(step.Change) / point.CurvatureAlong(step.Change);
-            isSteady = ratio is > 0.7 and < 1.4 && length == 1;
-            unsteady = isSteady || length < 1 ? 0 : unsteady + 1;
+            isSteady = ratio is > 0.7 and < 1.4 && length == 1 && walls.Count == 0;
+            unsteady = isSteady || length < 1 || walls.Count > 0 ? 0 : unsteady + 1;
             point = next;
             path.Add(point.Theta);
             _iterations++;
@@ -98,12 +100,49 @@ internal sealed class ConcaveSearch<TKernel>(StatisticSums<TKernel> sums)
         return new(null, face, Multipliers(point, face), path, _iterations, unsteady > 3, reason);
     }
 
+    private static bool IsConverged(double decrement, int sinceBest) =>
+        decrement <= Converged
+        || (sinceBest > 0 && decrement < Quadratic)
+        || (sinceBest > MaximalStandstill && decrement < LargestRounding);
+
+    /// <summary>Newton's step, or where it would cross walls, the best step that goes most of the way to them.</summary>
+    private static (Step Step, List<Wall> Walls) StepInside(NewtonSystem<TKernel> system, Face face, double[] theta)
+    {
+        var step = system.Full();
+        var (walls, advances) = (new List<Wall>(), new List<double>());
+        while (walls.Count < face.Limits!.Count)
+        {
+            var (room, wall) = Room(face, theta, step.Change, walls);
+            if (wall is null || NearestPart * room > 1)
+                break;
+            walls.Add(wall);
+            advances.Add(-WallPart * wall.Value(theta));
+            if (system.Towards(walls, advances) is not { } along)
+                break;
+            step = along;
+        }
+
+        return (step, walls);
+    }
+
+    /// <summary>Whether a wall is to be tried as a face: when a search along it has come close, and again at its end.</summary>
+    private static bool IsDueTrial(Wall wall, Step step, Dictionary<Wall, int> trials, Face face)
+    {
+        var trial = trials.GetValueOrDefault(wall);
+        if (!face.CanHold(wall) || step.Rise > (trial == 0 ? 1e-2 : 1e-10) || trial > 1)
+            return false;
+        trials[wall] = trial + 1;
+        return true;
+    }
+
     /// <summary>What the search on a face finds, if it holds for the whole set.</summary>
-    private SearchOutcome<TKernel>? OnFace(Face face, ModelPoint<TKernel> from, NewtonStep step, double room)
+    private SearchOutcome<TKernel>? OnFace(Face face, Wall wall, ModelPoint<TKernel> from, NewtonSystem<TKernel> system)
     {
         if (face.Limits is null)
             return null;
-        var theta = from.Basis.Step(from.Theta, Scaled(step.Centred, room));
+        var theta = system.Towards([wall], [-wall.Value(from.Theta)]) is { } across
+            ? from.Basis.Step(from.Theta, across.Centred)
+            : (double[])from.Theta.Clone();
         face.Restore(theta);
         if (face.Dimension == 0)
         {
@@ -113,7 +152,7 @@ internal sealed class ConcaveSearch<TKernel>(StatisticSums<TKernel> sums)
         }
 
         var start = sums.Kernel.NaturalSet.Contains(theta) && ModelPoint<TKernel>.TryAt(sums, theta, out _) is { } point
-            && NewtonStep.TryFrom(point, face) is not null
+            && NewtonSystem<TKernel>.TryAt(point, face) is not null
             ? point
             : StartingPoints<TKernel>.Best(sums, face, _unit, out _);
         if (start is null)
@@ -178,8 +217,8 @@ internal sealed class ConcaveSearch<TKernel>(StatisticSums<TKernel> sums)
         return unit;
     }
 
-    /// <summary>The multiple of a change at which the first wall is met, and that wall.</summary>
-    private static (double Room, Wall? Wall) Room(Face face, double[] theta, double[] change)
+    /// <summary>The multiple of a change at which the first wall other than those given is met, and that wall.</summary>
+    private static (double Room, Wall? Wall) Room(Face face, double[] theta, double[] change, List<Wall> others)
     {
         var (room, first) = (double.PositiveInfinity, (Wall?)null);
         foreach (var wall in face.Limits!)
@@ -188,7 +227,7 @@ internal sealed class ConcaveSearch<TKernel>(StatisticSums<TKernel> sums)
             for (var j = 0; j < change.Length; j++)
                 rate += wall.Weights[j] * change[j];
             var distance = -wall.Value(theta);
-            if (rate > 0 && distance / rate < room)
+            if (rate > 0 && distance / rate < room && !others.Contains(wall))
                 (room, first) = (distance / rate, wall);
         }
 
@@ -196,50 +235,35 @@ internal sealed class ConcaveSearch<TKernel>(StatisticSums<TKernel> sums)
     }
 
     /// <summary>A point along the step at which the likelihood is higher.</summary>
-    private (ModelPoint<TKernel>? Point, double Length) LineSearch(ModelPoint<TKernel> from, NewtonStep step, double room, out string? reason)
+    private (ModelPoint<TKernel>? Point, double Length) LineSearch(ModelPoint<TKernel> from, Step step, double limit, bool isTiny, out string? reason)
     {
-        const double Longest = 1024;
         reason = null;
-        var rise = step.Decrement * step.Decrement;
-        var limit = Math.Min(Longest, 0.9 * room);
         var length = Math.Min(1, limit);
-        var (low, lowRise, high, highRise) = (0.0, rise, double.PositiveInfinity, double.NaN);
+        var (low, lowRise, high) = (0.0, step.Rise, double.PositiveInfinity);
         ModelPoint<TKernel>? best = null;
-        var bestLength = 0.0;
         for (var trial = 0; trial < 60; trial++)
         {
             var next = ModelPoint<TKernel>.TryAt(sums, from.Basis.Step(from.Theta, Scaled(step.Centred, length)), out var failure);
-            if (next is null)
-            {
-                reason = failure;
-                if (best is not null)
-                    break;
-                (high, highRise) = (length, double.NaN);
-                length = low + (0.25 * (length - low));
-                continue;
-            }
-
-            var slope = next.SlopeAlong(step.Change);
-            var isTiny = step.Decrement < Quadratic;
-            var isLower = next.Objective < from.Objective - (1e-9 * (1 + Math.Abs(from.Objective)));
-            if ((slope < -0.5 * rise || isLower) && !isTiny)
+            reason = failure ?? reason;
+            var slope = next?.SlopeAlong(step.Change) ?? double.NaN;
+            var isLower = next is null || next.Objective < from.Objective - (1e-9 * (1 + Math.Abs(from.Objective)));
+            if (next is null || (!isTiny && (isLower || slope < -0.5 * step.Rise)))
             {
                 if (best is not null)
                     break;
-                (high, highRise) = (length, slope);
-                var secant = double.IsFinite(slope) && slope < 0 ? lowRise / (lowRise - slope) : 0.5;
+                high = length;
+                var secant = slope < 0 ? lowRise / (lowRise - slope) : 0.25;
                 length = low + (Math.Clamp(secant, 0.1, 0.9) * (high - low));
                 continue;
             }
 
-            (best, bestLength) = (next, length);
-            (low, lowRise) = (length, slope);
-            if (!(slope > 0.5 * rise) || isTiny || length >= limit || double.IsFinite(high))
+            (best, low, lowRise) = (next, length, slope);
+            if (!(slope > 0.5 * step.Rise) || isTiny || length >= limit || double.IsFinite(high))
                 break;
             length = Math.Min(2 * length, limit);
         }
 
-        return (best, bestLength);
+        return (best, low);
     }
 
     private static double[] Scaled(double[] change, double factor)

@@ -10,7 +10,8 @@ namespace FamilyGen.Fitting;
 /// <param name="Path">The trade parameters that were gone through.</param>
 /// <param name="Iterations">The steps taken.</param>
 /// <param name="Flat">A parameter about which the data say nothing, if there is one.</param>
-internal sealed record CurvedClimb<TKernel>(CurvedPoint<TKernel> End, bool IsMaximum, IReadOnlyList<double[]> Path, int Iterations, int? Flat)
+/// <param name="IsOnly">Whether the maximum is certified to be the only one.</param>
+internal sealed record CurvedClimb<TKernel>(CurvedPoint<TKernel> End, bool IsMaximum, IReadOnlyList<double[]> Path, int Iterations, int? Flat, bool IsOnly = false)
     where TKernel : struct, ITradeKernel;
 
 /// <summary>Trust-region Newton for a likelihood in trade parameters that need not be concave.</summary>
@@ -19,8 +20,8 @@ internal sealed class CurvedSearch<TKernel>(StatisticSums<TKernel> sums)
 {
     private const int MaximalSteps = 80;
     private const int StepsThatProveDivergence = 25;
-    private const int RefinedStarts = 6;
-    private const int SurveyedStarts = 40;
+    private const int RefinedStarts = 5;
+    private const int SurveyedStarts = 32;
     private const double Converged = 1e-13;
     private const double Quadratic = 1e-5;
 
@@ -47,7 +48,15 @@ internal sealed class CurvedSearch<TKernel>(StatisticSums<TKernel> sums)
         starts.Sort((a, b) => b.Point.Law.Objective.CompareTo(a.Point.Law.Objective));
         var climbs = new List<CurvedClimb<TKernel>>();
         for (var n = 0; n < starts.Count && n < RefinedStarts; n++)
-            climbs.Add(Climb(starts[n].Y, starts[n].Point));
+        {
+            var climb = Climb(starts[n].Y, starts[n].Point);
+            if (climb.IsMaximum && SeparableLikelihood.HasOneMaximum(sums, climb.End))
+                return [climb with { IsOnly = true }];
+            if (climb.Flat is not null)
+                return [climb];
+            climbs.Add(climb);
+        }
+
         climbs.Sort((a, b) => b.End.Law.Objective.CompareTo(a.End.Law.Objective));
         return climbs;
     }

@@ -16,22 +16,30 @@ internal sealed class ExactSum
     // Each addition changes a limb by less than 2^53 in magnitude; this many, upon a carried limb, stay below 2^63.
     private const int AdditionsBetweenCarries = 1000;
 
-    private long[] _limbs = [];
-    private int _first;
+    // At first the limbs of the numbers from 2^-64 to 2^64, so that most sums never grow.
+    private long[] _limbs = new long[5];
+    private int _first = (Bias / LimbBits) - 2;
     private int _additions;
 
     /// <summary>Adds a finite number.</summary>
     public void Add(double value)
     {
-        if (value == 0)
-            return;
         Split(value, out var significand, out var bit);
-        var limb = bit >> 5;
+        var limbs = _limbs;
+        var index = (bit >> 5) - _first;
+        if ((uint)index >= (uint)(limbs.Length - 1))
+        {
+            if (significand == 0)
+                return;
+            index = Reach(bit >> 5, 2);
+            limbs = _limbs;
+        }
+
         var shift = bit & (LimbBits - 1);
-        var index = Reach(limb, 2);
-        _limbs[index] += (significand << shift) & LimbMask;
-        _limbs[index + 1] += significand >> (LimbBits - shift);
-        CountAddition();
+        limbs[index] += (significand << shift) & LimbMask;
+        limbs[index + 1] += significand >> (LimbBits - shift);
+        if (++_additions >= AdditionsBetweenCarries)
+            Carry();
     }
 
     /// <summary>Adds the product of two finite numbers, all of its 106 bits.</summary>
@@ -51,20 +59,20 @@ internal sealed class ExactSum
         product >>= LimbBits;
         _limbs[index + 2] += (long)product & LimbMask;
         _limbs[index + 3] += (long)(product >> LimbBits);
-        CountAddition();
+        if (++_additions >= AdditionsBetweenCarries)
+            Carry();
     }
 
     /// <summary>Adds another sum; <paramref name="other"/> is only read.</summary>
     public void Add(ExactSum other)
     {
-        if (other._limbs.Length == 0)
-            return;
         var carried = other.Copy();
         carried.Carry();
         var index = Reach(carried._first, carried._limbs.Length);
         for (var i = 0; i < carried._limbs.Length; i++)
             _limbs[index + i] += carried._limbs[i];
-        CountAddition();
+        if (++_additions >= AdditionsBetweenCarries)
+            Carry();
     }
 
     /// <summary>The sum rounded once to the nearest double, ties to even; infinite when it is beyond the largest double.</summary>
@@ -145,14 +153,6 @@ internal sealed class ExactSum
 
     private void Widen(int limb, int count)
     {
-        if (_limbs.Length == 0)
-        {
-            _first = Math.Max(limb - 2, 0);
-            _limbs = new long[limb + count + 1 - _first];
-            return;
-        }
-
-        // The highest limb carries the sign of the whole; it is carried on so that limbs above it can be used.
         var first = Math.Min(_first, limb);
         var end = Math.Max(_first + _limbs.Length, limb + count);
         var wider = new long[end - first];
@@ -161,18 +161,10 @@ internal sealed class ExactSum
         _first = first;
     }
 
-    private void CountAddition()
-    {
-        if (++_additions >= AdditionsBetweenCarries)
-            Carry();
-    }
-
     /// <summary>Brings every limb but the highest into [0, 2^32); the highest carries the sign and stays below 2^32.</summary>
     private void Carry()
     {
         _additions = 0;
-        if (_limbs.Length == 0)
-            return;
         long carry = 0;
         for (var i = 0; i < _limbs.Length - 1; i++)
         {
@@ -195,7 +187,7 @@ internal sealed class ExactSum
     private bool CarryToMagnitude()
     {
         Carry();
-        if (_limbs.Length == 0 || _limbs[^1] >= 0)
+        if (_limbs[^1] >= 0)
             return false;
         for (var i = 0; i < _limbs.Length; i++)
             _limbs[i] = -_limbs[i];

@@ -88,7 +88,7 @@ internal static class NaturalFit
     private static double[,]? Covariance<TKernel>(ModelPoint<TKernel> maximum, Face face, double weight)
         where TKernel : struct, IKernel
     {
-        if (NewtonStep.Covariance(maximum, face) is not { } covariance)
+        if (NewtonSystem<TKernel>.TryAt(maximum, face)?.Covariance() is not { } covariance)
             return null;
         for (var i = 0; i < TKernel.Count; i++)
         {

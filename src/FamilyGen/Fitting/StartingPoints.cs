@@ -8,6 +8,9 @@ namespace FamilyGen.Fitting;
 internal static class StartingPoints<TKernel>
     where TKernel : struct, IKernel
 {
+    // A start within a standard deviation or so of the data's means needs no rival.
+    private const double CloseEnough = 1.5;
+
     /// <summary>The best of a few points inside the parameter set; null, with a reason, when none can be evaluated.</summary>
     public static ModelPoint<TKernel>? Best(StatisticSums<TKernel> sums, Face face, double[] unit, out string? reason)
     {
@@ -15,10 +18,12 @@ internal static class StartingPoints<TKernel>
         reason = "no parameters were found for which the normalizer is finite";
         foreach (var theta in Candidates(sums, face, unit))
         {
-            if (ModelPoint<TKernel>.TryAt(sums, theta, out var failure) is { } point && NewtonStep.TryFrom(point, face) is not null)
+            if (ModelPoint<TKernel>.TryAt(sums, theta, out var failure) is { } point && NewtonSystem<TKernel>.TryAt(point, face) is { } system)
             {
                 if (best is null || point.Objective > best.Objective)
                     best = point;
+                if (system.Decrement < CloseEnough)
+                    return point;
             }
             else
             {

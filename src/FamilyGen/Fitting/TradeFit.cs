@@ -171,7 +171,6 @@ internal static class TradeFit
             }
         }
 
-        var isGlobal = SeparableLikelihood.HasOneMaximum(sums, best.End);
         var isHighest = best.End.Law.Objective >= climbs[0].End.Law.Objective - (1e-9 * (1 + Math.Abs(climbs[0].End.Law.Objective)));
         return new()
         {
@@ -181,7 +180,7 @@ internal static class TradeFit
             Observations = sums.Count,
             TotalWeight = weight,
             Iterations = best.Iterations,
-            Status = isGlobal ? FitStatus.InteriorMaximum : FitStatus.LocalMaximum,
+            Status = best.IsOnly ? FitStatus.InteriorMaximum : FitStatus.LocalMaximum,
             Notes = isHighest ? [] : ["the likelihood is higher elsewhere, but has no maximum there"],
             Landmarks = NaturalFit.Landmarks(best.End.Law.Law),
         };
