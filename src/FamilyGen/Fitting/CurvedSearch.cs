@@ -123,7 +123,7 @@ internal sealed class CurvedSearch<TKernel>(StatisticSums<TKernel> sums)
             while (!moved && radius > SmallestRadius)
             {
                 if (TrustRegion.Step(gradient, hessian, unit, radius) is not var (step, rise, isOnRim))
-                    return new(point, false, path, steps, null);
+                    return new(point, false, path, steps, point.FlatParameter());
                 var next = new double[y.Length];
                 for (var i = 0; i < y.Length; i++)
                     next[i] = y[i] + step[i];
@@ -145,7 +145,7 @@ internal sealed class CurvedSearch<TKernel>(StatisticSums<TKernel> sums)
                 return new(point, isSteady && decrement < Quadratic && point.FlatParameter() is null, path, steps, point.FlatParameter());
         }
 
-        return new(point, false, path, path.Count - 1, null);
+        return new(point, false, path, path.Count - 1, point.FlatParameter());
     }
 
     /// <summary>A rise of at least a part of what the model promised, or one too small to be told from rounding.</summary>

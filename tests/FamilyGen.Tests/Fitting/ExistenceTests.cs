@@ -79,7 +79,7 @@ public class ExistenceTests
     {
         var account = Try<TFamily>(data, out _);
         Assert.NotNull(account);
-        Assert.Contains(expected, account, StringComparison.Ordinal);
+        Assert.True(account.Contains(expected, StringComparison.Ordinal), account);
         var sums = new StatisticSums<TradeKernel<TFamily>>(default);
         sums.AddRange(data);
         var exception = Assert.Throws<FitException>(() => MaximumLikelihood.FitTrade(sums, (_, _) => default(TFamily)));
