@@ -2,7 +2,6 @@ using System;
 using System.Collections.Generic;
 using System.IO;
 using System.Linq;
-using System.Runtime.CompilerServices;
 
 namespace FamilyGen.Generator.Tests.Pipeline;
 
@@ -65,6 +64,5 @@ public class ArchitectureTests
         return at >= 0 && !line.TrimStart().StartsWith("//", StringComparison.Ordinal) && !line.TrimStart().StartsWith("namespace", StringComparison.Ordinal);
     }
 
-    private static string Source([CallerFilePath] string here = "") =>
-        Path.GetFullPath(Path.Combine(Path.GetDirectoryName(here)!, "..", "..", "..", "src", "FamilyGen.Generator"));
+    private static string Source() => Path.Combine(Checkout.Root, "src", "FamilyGen.Generator");
 }

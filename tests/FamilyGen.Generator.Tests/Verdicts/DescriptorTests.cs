@@ -1,6 +1,5 @@
 using System.IO;
 using System.Linq;
-using System.Runtime.CompilerServices;
 using System.Threading.Tasks;
 using FamilyGen.Generator.Diagnostics;
 using FamilyGen.Generator.Tests.Reading;
@@ -18,7 +17,7 @@ public class DescriptorTests
     {
         foreach (var descriptor in Descriptors.All)
         {
-            var page = Path.Combine(Root(), descriptor.HelpLinkUri);
+            var page = Path.Combine(Checkout.Root, descriptor.HelpLinkUri);
             Assert.True(File.Exists(page), page);
             var text = File.ReadAllText(page);
             Assert.StartsWith("# " + descriptor.Id + ": ", text);
@@ -26,7 +25,7 @@ public class DescriptorTests
             Assert.Contains("```csharp", text);
         }
 
-        var pages = Directory.GetFiles(Path.Combine(Root(), "src/FamilyGen.Generator/Diagnostics/help"), "*.md").Select(Path.GetFileNameWithoutExtension);
+        var pages = Directory.GetFiles(Path.Combine(Checkout.Root, "src/FamilyGen.Generator/Diagnostics/help"), "*.md").Select(Path.GetFileNameWithoutExtension);
         Assert.Equal(Descriptors.All.Select(d => d.Id).Order(), pages.Order());
     }
 
@@ -69,6 +68,4 @@ public class DescriptorTests
     // What is said of the parameter set is said of the whole class.
     private static string ClassName(string id) => id is "FG0401" or "FG0405" ? "{|" + id + ":ShiftStoppages|}" : "ShiftStoppages";
 
-    private static string Root([CallerFilePath] string here = "") =>
-        Path.GetFullPath(Path.Combine(Path.GetDirectoryName(here)!, "..", "..", ".."));
 }
